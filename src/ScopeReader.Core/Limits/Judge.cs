@@ -1,0 +1,89 @@
+using ScopeReader.Captures;
+using ScopeReader.Readings;
+
+namespace ScopeReader.Limits;
+
+/// <summary>Holds readings against limits.</summary>
+/// <remarks>
+/// Guarded rule: JCGM 106:2012, clause 8 (guard bands), with ISO 14253-1's proof of conformance and of non-conformance at
+/// guard 1. Conformance probability: JCGM 106:2012, 7.4, from the reading's own error distribution.
+/// </remarks>
+public static class Judge
+{
+    /// <summary>The verdicts on one channel.</summary>
+    /// <param name="plan">The plan, whose limits are judged.</param>
+    /// <param name="channel">The channel.</param>
+    /// <param name="sheet">What was measured on it.</param>
+    public static IReadOnlyList<Verdict> Channel(Plan plan, Channel channel, ReadingSheet sheet)
+    {
+        ArgumentNullException.ThrowIfNull(plan);
+        ArgumentNullException.ThrowIfNull(channel);
+        ArgumentNullException.ThrowIfNull(sheet);
+        CaptureKinds kind = channel is Waveform ? CaptureKinds.Waveform : CaptureKinds.Spectrum;
+        var verdicts = new List<Verdict>();
+        foreach (Limit limit in plan.Limits)
+            if ((limit.Channel ?? plan.Channel ?? channel.Name) == channel.Name)
+                verdicts.Add(Limit(limit, kind, sheet));
+        return verdicts;
+    }
+
+    private static Verdict Limit(Limit limit, CaptureKinds kind, ReadingSheet sheet)
+    {
+        if (!limit.Quantity.Kinds.HasFlag(kind))
+            return new Verdict(limit, VerdictOutcome.NotApplicable, null, null, kind == CaptureKinds.Waveform ? "a waveform does not have it" : "a spectrum trace does not have it");
+        if (sheet.Primary(limit.Quantity) is { } reading)
+            return Reading(limit, reading);
+        string reason = sheet.NotMeasured.FirstOrDefault(n => n.Quantity == limit.Quantity)?.Reason ?? "this capture does not show it";
+        return new Verdict(limit, VerdictOutcome.NotMeasured, null, null, reason);
+    }
+
+    /// <summary>The verdict on one reading.</summary>
+    /// <param name="limit">The limit, in the reading's unit.</param>
+    /// <param name="reading">A reading of the limit's quantity.</param>
+    public static Verdict Reading(Limit limit, Reading reading)
+    {
+        ArgumentNullException.ThrowIfNull(limit);
+        ArgumentNullException.ThrowIfNull(reading);
+        if (reading.Quantity.Unit != "V" && reading.Quantity.Unit != reading.Unit)
+            return new Verdict(limit, VerdictOutcome.NotMeasured, reading, null,
+                $"the limit is in {reading.Quantity.Unit} and the reading in {reading.Unit}: state the sample interval with --interval or --rate");
+
+        Budget budget = reading.Budget;
+        double value = reading.Value, low = limit.Low ?? double.NegativeInfinity, high = limit.High ?? double.PositiveInfinity;
+        bool inside = value >= low && value <= high, complete = budget.Missing.Count == 0;
+        // The true value is the reading less its error.
+        double? probability = complete ? budget.Probability(value - low) - budget.Probability(value - high) : null;
+
+        if (limit.Rule == DecisionRule.Simple)
+            return new Verdict(limit, inside ? VerdictOutcome.Pass : VerdictOutcome.Fail, reading, probability,
+                complete ? "on the value alone" : $"on the value as indicated: {Unstated(budget)}");
+        if (!complete)
+            return new Verdict(limit, VerdictOutcome.Undecided, reading, null, Unstated(budget));
+
+        double guard = limit.Guard * budget.ExpandedUncertainty;
+        if (value >= low + guard && value <= high - guard)
+            return new Verdict(limit, VerdictOutcome.Pass, reading, probability, "inside the limit by the guard band or more");
+        if (value < low - guard || value > high + guard)
+            return new Verdict(limit, VerdictOutcome.Fail, reading, probability, "beyond the limit by more than the guard band");
+        return new Verdict(limit, VerdictOutcome.Undecided, reading, probability, WhatWouldDecide(budget, value, low, high, limit.Guard, guard));
+    }
+
+    private static string Unstated(Budget budget) =>
+        "not stated in the plan: " + string.Join(", ", budget.Missing.Select(name => $"{name} (add {PlanKeys.For(name)} to [chain])"));
+
+    // A longer record shrinks the capture's own part only.
+    private static string WhatWouldDecide(Budget budget, double value, double low, double high, double factor, double guard)
+    {
+        if (2 * guard > high - low)
+            return "the limit is narrower than twice the guard band: no value could pass with this chain";
+        BudgetTerm largest = budget.Terms.MaxBy(t => t.Contribution)!;
+        double distance = Math.Min(Math.Abs(value - low), Math.Abs(high - value));
+        double chainOnly = new Budget(budget.Terms.Where(t => t.OfChain)).ExpandedUncertainty * factor;
+        if (largest.OfChain && chainOnly > distance)
+            return $"within the guard band, and {largest.Name} alone is too uncertain: a longer record will not decide it, a {Remedy(largest.Name)} would";
+        return $"within the guard band; most of it is {largest.Name}: a longer record, or several, would decide it";
+    }
+
+    private static string Remedy(string term) =>
+        term.StartsWith("timebase", StringComparison.Ordinal) ? "better or calibrated timebase" : "better or calibrated chain";
+}

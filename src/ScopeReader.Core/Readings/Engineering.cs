@@ -1,0 +1,82 @@
+using System.Globalization;
+
+namespace ScopeReader.Readings;
+
+/// <summary>Values as people read them: a prefix, the unit, and the digits that the uncertainty leaves.</summary>
+public static class Engineering
+{
+    private const string Prefixes = "qryzafpnµm kMGTPEZYRQ";
+    private const int BasePrefix = 10;
+
+    /// <summary>A value in its own right, to a number of significant digits: "38.2 MHz".</summary>
+    /// <param name="value">In <paramref name="unit"/>.</param>
+    /// <param name="unit">A unit without prefix.</param>
+    /// <param name="digits">Significant digits, 1 to 15.</param>
+    public static string Format(double value, string unit, int digits = 4)
+    {
+        if (value == 0)
+            return Join("0", "", unit);
+        int power = PowerOf(value, unit, digits);
+        double scaled = Scale(value, power);
+        return Join(Fixed(scaled, digits - 1 - Magnitude(scaled, digits)), Prefix(power), unit);
+    }
+
+    /// <summary>A value and its expanded uncertainty, two digits of it, in one unit: "38.20 MHz ± 0.40 MHz".</summary>
+    /// <param name="value">In <paramref name="unit"/>.</param>
+    /// <param name="uncertainty">0 or more; 0 gives the value alone.</param>
+    /// <param name="unit">A unit without prefix.</param>
+    public static string Format(double value, double uncertainty, string unit)
+    {
+        (string number, string spread, string prefixed) = Parts(value, uncertainty, unit);
+        return spread.Length == 0 ? Join(number, "", prefixed) : $"{Join(number, "", prefixed)} ± {Join(spread, "", prefixed)}";
+    }
+
+    /// <summary>The same in parts, for a table: the value, the uncertainty (empty where there is none) and their prefixed unit.</summary>
+    public static (string Value, string Uncertainty, string Unit) Parts(double value, double uncertainty, string unit)
+    {
+        if (!(uncertainty > 0) || !double.IsFinite(uncertainty))
+        {
+            int own = value == 0 ? 0 : PowerOf(value, unit, 6);
+            double alone = Scale(value, own);
+            return (value == 0 ? "0" : Fixed(alone, 5 - Magnitude(alone, 6)), "", Prefix(own) + unit);
+        }
+        int power = PowerOf(Math.Max(Math.Abs(value), uncertainty), unit, 2);
+        double spread = Scale(uncertainty, power);
+        int decimals = 1 - Magnitude(spread, 2);
+        return (Fixed(Scale(value, power), decimals), Fixed(spread, decimals), Prefix(power) + unit);
+    }
+
+    private static string Prefix(int power) => power == 0 ? "" : Prefixes[power + BasePrefix].ToString();
+
+    private static string Join(string number, string prefix, string unit) =>
+        prefix.Length + unit.Length == 0 || unit == "1" ? number + prefix : $"{number} {prefix}{unit}";
+
+    // Powers of a thousand. Ratios, decibels and plain numbers take no prefix.
+    private static int PowerOf(double value, string unit, int digits)
+    {
+        if (unit is "" or "1" or "%" or "ppm" or "bit" or "sample" or "1/sample" or "°C" || unit.StartsWith("dB", StringComparison.Ordinal) || unit.StartsWith("ppm", StringComparison.Ordinal))
+            return 0;
+        return Math.Clamp((int)Math.Floor(Magnitude(value, digits) / 3.0), -BasePrefix, Prefixes.Length - 1 - BasePrefix);
+    }
+
+    // The decimal exponent after rounding to the digits: 999.96 to four digits is 1.000e3.
+    private static int Magnitude(double value, int digits)
+    {
+        string text = Math.Abs(value).ToString("E" + (digits - 1), CultureInfo.InvariantCulture);
+        return int.Parse(text.AsSpan(text.IndexOf('E') + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
+    }
+
+    private static double Scale(double value, int power) => power >= 0 ? value / Math.Pow(10, 3 * power) : value * Math.Pow(10, -3 * power);
+
+    private static string Fixed(double value, int decimals)
+    {
+        if (decimals >= 0)
+            return WithoutNegativeZero(value.ToString("F" + Math.Min(decimals, 15), CultureInfo.InvariantCulture));
+        // Digits left of the point that the uncertainty does not support read as zeros.
+        double step = Math.Pow(10, -decimals);
+        return WithoutNegativeZero((Math.Round(value / step) * step).ToString("F0", CultureInfo.InvariantCulture));
+    }
+
+    private static string WithoutNegativeZero(string text) =>
+        text[0] == '-' && text.AsSpan().IndexOfAnyExcept("-0.") < 0 ? text[1..] : text;
+}

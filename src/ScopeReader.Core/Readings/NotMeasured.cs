@@ -1,0 +1,7 @@
+namespace ScopeReader.Readings;
+
+/// <summary>A quantity that this capture does not support.</summary>
+/// <param name="Quantity">The quantity.</param>
+/// <param name="Code">Which reason, kebab-case, for programs: <c>too-few-samples</c>.</param>
+/// <param name="Reason">The reason and what to do, for people.</param>
+public sealed record NotMeasured(Quantity Quantity, string Code, string Reason);

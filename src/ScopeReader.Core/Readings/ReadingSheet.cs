@@ -1,0 +1,34 @@
+namespace ScopeReader.Readings;
+
+/// <summary>Where the analysers of one channel write what they found, in the order of work.</summary>
+public sealed class ReadingSheet
+{
+    private readonly List<Reading> _readings = [];
+    private readonly List<NotMeasured> _notMeasured = [];
+    private readonly List<Finding> _findings = [];
+
+    /// <summary>The readings so far.</summary>
+    public IReadOnlyList<Reading> Readings => _readings;
+
+    /// <summary>What could not be measured, so far.</summary>
+    public IReadOnlyList<NotMeasured> NotMeasured => _notMeasured;
+
+    /// <summary>The findings so far.</summary>
+    public IReadOnlyList<Finding> Findings => _findings;
+
+    /// <summary>Writes a reading down.</summary>
+    public void Add(Reading reading) => _readings.Add(reading);
+
+    /// <summary>Writes a finding down.</summary>
+    public void Add(Finding finding) => _findings.Add(finding);
+
+    /// <summary>Writes down why quantities could not be measured.</summary>
+    public void Refuse(string code, string reason, params ReadOnlySpan<Quantity> quantities)
+    {
+        foreach (Quantity quantity in quantities)
+            _notMeasured.Add(new NotMeasured(quantity, code, reason));
+    }
+
+    /// <summary>The primary reading of a quantity, or null.</summary>
+    public Reading? Primary(Quantity quantity) => _readings.Find(r => r.IsPrimary && r.Quantity == quantity);
+}
