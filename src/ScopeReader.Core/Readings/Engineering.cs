@@ -40,7 +40,7 @@ public static class Engineering
             double alone = Scale(value, own);
             return (value == 0 ? "0" : Fixed(alone, 5 - Magnitude(alone, 6)), "", Prefix(own) + unit);
         }
-        int power = PowerOf(Math.Max(Math.Abs(value), uncertainty), unit, 2);
+        int power = PowerOf(Math.Max(Math.Abs(value), uncertainty), unit, 15);
         double spread = Scale(uncertainty, power);
         int decimals = 1 - Magnitude(spread, 2);
         return (Fixed(Scale(value, power), decimals), Fixed(spread, decimals), Prefix(power) + unit);

@@ -1,0 +1,94 @@
+using ScopeReader.Limits;
+using ScopeReader.Readings;
+
+namespace ScopeReader.Tests.Limits;
+
+public class JudgeTests
+{
+    // JCGM 106:2012 examples are for a normal error: u is exact there, so the terms below have no degrees of freedom.
+    private static Reading Ppm(double value, double u, params string[] missing) =>
+        new(Quantities.FrequencyError, value, "ppm", new Budget([BudgetTerm.Normal("noise", u)], missing), "crossings");
+
+    private static Limit Within(double bound, DecisionRule rule = DecisionRule.Guarded, double guard = 1) =>
+        new(Quantities.FrequencyError, -bound, bound) { Rule = rule, Guard = guard };
+
+    [Fact]
+    public void One_sided_conformance_probability()
+    {
+        var limit = new Limit(Quantities.FrequencyError, null, 20);
+
+        // C16: JCGM 106 7.2, limit 20 ppm, y = 17.0, u = 1.2. Tolerance: the row's.
+        Assert.Equal(0.993790334674224, Judge.Reading(limit, Ppm(17, 1.2)).Probability!.Value, 1e-9);
+    }
+
+    [Fact]
+    public void Two_sided_conformance_probability() =>
+        // C21: JCGM 106 7.4, limits ±20 ppm, y = 18.5, u = 2.
+        Assert.Equal(0.773372647623132, Judge.Reading(Within(20), Ppm(18.5, 2)).Probability!.Value, 1e-9);
+
+    [Fact]
+    public void Conformance_probability_of_a_lower_limit()
+    {
+        // C20: JCGM 106 7.3 Zener example (from memory): T_U = -5.40 V, y = -5.47 V, u = 0.05 V → 0.92, printed to two digits.
+        var limit = new Limit(Quantities.LowLevel, null, -5.40);
+        var reading = new Reading(Quantities.LowLevel, -5.47, "V", new Budget([BudgetTerm.Normal("noise", 0.05)]), "shorth");
+
+        Assert.Equal(0.92, Judge.Reading(limit, reading).Probability!.Value, 0.005);
+    }
+
+    // ISO 14253-1 with guard 1: pass to 20 − U, fail from 20 + U. U = 1.959964 u (normal, 95 %), u = 1 ppm.
+    [Theory]
+    [InlineData(18.03, VerdictOutcome.Pass)]
+    [InlineData(18.05, VerdictOutcome.Undecided)]
+    [InlineData(21.95, VerdictOutcome.Undecided)]
+    [InlineData(21.97, VerdictOutcome.Fail)]
+    [InlineData(-18.03, VerdictOutcome.Pass)]
+    [InlineData(-21.97, VerdictOutcome.Fail)]
+    public void The_guarded_rule_needs_proof_either_way(double value, VerdictOutcome expected) =>
+        Assert.Equal(expected, Judge.Reading(Within(20), Ppm(value, 1)).Outcome);
+
+    [Theory]
+    [InlineData(20, VerdictOutcome.Pass)]
+    [InlineData(20.001, VerdictOutcome.Fail)]
+    public void The_simple_rule_looks_at_the_value(double value, VerdictOutcome expected) =>
+        Assert.Equal(expected, Judge.Reading(Within(20, DecisionRule.Simple), Ppm(value, 1)).Outcome);
+
+    [Fact]
+    public void An_unstated_chain_term_leaves_the_guarded_rule_undecided_and_names_the_key()
+    {
+        Verdict verdict = Judge.Reading(Within(20), Ppm(0, 0.1, "timebase"));
+
+        Assert.Equal(VerdictOutcome.Undecided, verdict.Outcome);
+        Assert.Equal("not stated in the plan: timebase (add timebase-tolerance to [chain])", verdict.Reason);
+        Assert.Null(verdict.Probability);
+    }
+
+    [Fact]
+    public void An_unstated_chain_term_is_said_under_the_simple_rule()
+    {
+        Verdict verdict = Judge.Reading(Within(20, DecisionRule.Simple), Ppm(0, 0.1, "timebase"));
+
+        Assert.Equal(VerdictOutcome.Pass, verdict.Outcome);
+        Assert.Equal("on the value as indicated: not stated in the plan: timebase (add timebase-tolerance to [chain])", verdict.Reason);
+    }
+
+    [Fact]
+    public void A_timebase_that_is_too_loose_is_named_as_what_to_improve()
+    {
+        var reading = new Reading(Quantities.FrequencyError, 40, "ppm",
+            new Budget([BudgetTerm.Normal("noise", 0.1), BudgetTerm.Rectangular("timebase", 25, ofChain: true)]), "crossings");
+
+        Assert.Equal("within the guard band, and timebase alone is too uncertain: a longer record will not decide it, a better or calibrated timebase would",
+            Judge.Reading(Within(50), reading).Reason);
+    }
+
+    [Fact]
+    public void A_limit_narrower_than_its_guard_bands_says_that_nothing_could_pass() =>
+        Assert.Equal("the limit is narrower than twice the guard band: no value could pass with this chain",
+            Judge.Reading(Within(1), Ppm(0, 1)).Reason);
+
+    [Fact]
+    public void A_wider_guard_band_takes_more_proof() =>
+        // 17 + 2 × 1.96 = 20.92 > 20.
+        Assert.Equal(VerdictOutcome.Undecided, Judge.Reading(Within(20, guard: 2), Ppm(17, 1)).Outcome);
+}
