@@ -34,7 +34,7 @@ public static class Analysis
             channels.Add(new ChannelMeasurement(channel, sheet.Readings, sheet.NotMeasured, sheet.Findings, Judge.Channel(plan, channel, sheet)));
             progress?.Report((double)channels.Count / capture.Channels.Count);
         }
-        return new Measurement(capture, channels, Cautions.For(plan), Summary(plan, channels));
+        return new Measurement(capture, channels, Cautions.For(capture, plan, channels), Summary(plan, channels));
     }
 
     private static Outcome Summary(Plan plan, List<ChannelMeasurement> channels)
