@@ -1,0 +1,22 @@
+namespace ScopeReader.Program.Tests;
+
+public class ReadmeTests
+{
+    private const string Run = "dotnet run -c Release --project src/ScopeReader -- ";
+
+    [Fact]
+    public async Task The_measure_command_prints_what_the_readme_shows()
+    {
+        string[] lines = await File.ReadAllLinesAsync(Path.Combine(BuiltProgram.Root, "README.md"));
+        int at = Array.FindIndex(lines, line => line.StartsWith(Run + "measure ", StringComparison.Ordinal));
+        Assert.True(at >= 0, "README.md has no measure command");
+        // The command stands in a block of its own; the next block is its output.
+        int opened = Array.FindIndex(lines, Array.IndexOf(lines, "```", at) + 1, line => line.StartsWith("```", StringComparison.Ordinal));
+        int closed = Array.IndexOf(lines, "```", opened + 1);
+
+        (int status, string output, _) = await BuiltProgram.Run(lines[at][Run.Length..].Split(' '));
+
+        Assert.Equal(0, status);
+        Assert.Equal(string.Join('\n', lines[(opened + 1)..closed]), string.Join('\n', output.TrimEnd().Split('\n').Select(line => line.TrimEnd())));
+    }
+}
