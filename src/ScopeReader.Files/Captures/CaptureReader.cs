@@ -1,0 +1,133 @@
+using ScopeReader.Captures;
+using ScopeReader.Files.Meaning;
+using ScopeReader.Files.Rows;
+using ScopeReader.Files.Structure;
+using ScopeReader.Files.Text;
+
+namespace ScopeReader.Files;
+
+/// <summary>The way from a file's bytes to a <see cref="Capture"/>: find the block of numbers, read round it, read it, fit its axis.</summary>
+public static class CaptureReader
+{
+    private const int Head = 1 << 16, LongestPreamble = 8 << 20, EnoughRows = 10;
+
+    /// <summary>Reads a file; <c>-</c> is standard input.</summary>
+    /// <param name="path">The file as the person named it.</param>
+    /// <param name="settings">What the person says about it.</param>
+    /// <param name="scale">Multiplies the values (the chain's scale); levels in dB shift by 20 log of it.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <exception cref="ImportException">The file is not there, cannot be read, or is no capture.</exception>
+    /// <exception cref="OperationCanceledException">The work was stopped.</exception>
+    public static CaptureFile Read(string path, ImportSettings settings, double scale = 1, CancellationToken cancellation = default)
+    {
+        ArgumentException.ThrowIfNullOrEmpty(path);
+        if (path == "-")
+            return Read(Console.OpenStandardInput(), "standard input", settings, scale, cancellation);
+        try
+        {
+            return Read(new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite | FileShare.Delete, 0, FileOptions.SequentialScan), path, settings, scale, cancellation);
+        }
+        catch (Exception e) when (e is FileNotFoundException or DirectoryNotFoundException)
+        {
+            throw new ImportException(path, "expected a file, found none of that name. Check the name and the folder.", cause: e);
+        }
+        catch (UnauthorizedAccessException e)
+        {
+            throw new ImportException(path, Directory.Exists(path)
+                ? "expected a file, found a folder. Name a file in it."
+                : "expected a file that may be read, found one that may not. Check its permissions.", cause: e);
+        }
+    }
+
+    /// <summary>Reads a stream to its end and closes it.</summary>
+    /// <param name="stream">The file's bytes.</param>
+    /// <param name="file">Its name, for messages and the capture.</param>
+    /// <param name="settings">What the person says about it.</param>
+    /// <param name="scale">Multiplies the values.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <exception cref="ImportException">The stream cannot be read or is no capture.</exception>
+    /// <exception cref="OperationCanceledException">The work was stopped.</exception>
+    public static CaptureFile Read(Stream stream, string file, ImportSettings settings, double scale = 1, CancellationToken cancellation = default)
+    {
+        ArgumentNullException.ThrowIfNull(stream);
+        ArgumentNullException.ThrowIfNull(settings);
+        try
+        {
+            using var text = new Utf8Text(stream, file, settings.Encoding);
+            return Read(text, file, settings, scale, cancellation);
+        }
+        catch (Exception e) when (e is IOException or InvalidDataException)
+        {
+            throw new ImportException(file, $"expected to read it to its end, found: {Excerpt.Of(e.Message, 120)} Save or copy it again.", cause: e);
+        }
+    }
+
+    private static CaptureFile Read(Utf8Text text, string file, ImportSettings settings, double scale, CancellationToken cancellation)
+    {
+        var window = new TextWindow(text, file);
+        TableShape shape = FindTable(window, file, settings);
+        Header header = Header.Read(shape);
+        var table = new Table(shape, header, Roles.Of(shape, header.Labels, settings), shape.First + 1);
+        SkipLines(window, shape.First);
+        new RowReader(window, file, table).Read(cancellation);
+
+        var doubts = new List<string>();
+        if (table.IsCut)
+            doubts.Add("the last line breaks off: it was left out");
+        var builder = new ChannelBuilder(file, table, settings, scale, doubts);
+        builder.Build();
+        return new CaptureFile(
+            new Capture(file, text.Finish(), builder.Channels, doubts),
+            new ImportReport
+            {
+                File = file,
+                Encoding = text.EncodingName,
+                Delimiter = NameOf(shape),
+                DecimalMark = shape.Mark.ToString(),
+                PreambleLines = header.FirstRow,
+                HeaderRows = header.Rows,
+                FirstLine = table.FirstLine,
+                Axis = builder.Axis,
+                Channels = builder.Reports,
+                Doubts = doubts,
+            });
+    }
+
+    private static TableShape FindTable(TextWindow window, string file, ImportSettings settings)
+    {
+        for (int head = Head; ; head *= 2)
+        {
+            while (window.Pending.Length < head && window.Fill())
+            {
+            }
+            ReadOnlyMemory<byte> lines = window.PendingMemory[..Math.Min(head, window.Pending.Length)];
+            bool whole = window.Ended && lines.Length == window.Pending.Length;
+            if (!whole)
+                lines = lines[..(lines.Span.LastIndexOf((byte)'\n') + 1)];
+            TableShape? shape = TableFinder.Find(lines, settings);
+            if (shape is not null && (whole || shape.Sampled >= EnoughRows))
+                return shape;
+            if (whole || head >= LongestPreamble)
+                throw new ImportException(file, $"expected a table of numbers, found only text: \"{Excerpt.Of(window.Pending)}\". Export the capture as CSV.");
+        }
+    }
+
+    private static void SkipLines(TextWindow window, int lines)
+    {
+        int bytes = 0;
+        for (int i = 0; i < lines; i++)
+            bytes += window.Pending[bytes..].IndexOf((byte)'\n') + 1;
+        window.Consume(bytes, lines);
+    }
+
+    private static string NameOf(TableShape shape) => shape switch
+    {
+        { Columns: [0] } when shape.Rows[shape.First].Length == 1 => "none",
+        { Delimiter: ',' } => "comma",
+        { Delimiter: ';' } => "semicolon",
+        { Delimiter: '\t' } => "tab",
+        { Delimiter: '|' } => "bar",
+        { Delimiter: RowSplitter.Spaces } => "spaces",
+        _ => shape.Delimiter.ToString(),
+    };
+}

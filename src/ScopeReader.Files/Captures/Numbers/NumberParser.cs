@@ -1,0 +1,87 @@
+using System.Globalization;
+
+namespace ScopeReader.Files.Numbers;
+
+/// <summary>Numbers as instruments print them, correctly rounded: the same bits as <see cref="double.Parse(string)"/>.</summary>
+/// <remarks>Up to 2^53 of digits and a power of ten up to 22 are both exact doubles, so that one multiplication or division
+/// rounds once (Clinger 1990). Everything else goes the long way.</remarks>
+internal static class NumberParser
+{
+    /// <summary>The longest number that is read, in bytes.</summary>
+    public const int LongestNumber = 1024;
+
+    private const int ExactPower = 22;
+    private const ulong ExactDigits = 1UL << 53;
+
+    private static readonly double[] s_powers = [1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19, 1e20, 1e21, 1e22];
+
+    /// <summary>Reads a whole cell as a number.</summary>
+    /// <param name="cell">UTF-8, without spaces round it.</param>
+    /// <param name="mark">The decimal mark.</param>
+    /// <param name="value">The number; infinite where it is too large for a double.</param>
+    /// <param name="lastDigit">Decimal exponent of the last printed digit: -12 for <c>1.000e-9</c>.</param>
+    public static bool TryParse(ReadOnlySpan<byte> cell, byte mark, out double value, out int lastDigit)
+    {
+        (value, lastDigit) = (0, 0);
+        int i = 0, digits = 0, exponent = 0;
+        ulong significand = 0;
+        bool negative = cell.Length > 0 && cell[0] == '-';
+        if (negative || (cell.Length > 0 && cell[0] == '+'))
+            i++;
+        for (; i < cell.Length && (uint)(cell[i] - '0') <= 9; i++, digits++)
+            significand = unchecked(significand * 10 + (ulong)(cell[i] - '0'));
+        if (i < cell.Length && cell[i] == mark)
+        {
+            int fraction = ++i;
+            for (; i < cell.Length && (uint)(cell[i] - '0') <= 9; i++)
+                significand = unchecked(significand * 10 + (ulong)(cell[i] - '0'));
+            exponent = fraction - i;
+            digits -= exponent;
+        }
+        if (digits == 0 || cell.Length > LongestNumber)
+            return false;
+        if (i < cell.Length && (cell[i] | 0x20) == 'e')
+        {
+            if (!TryExponent(cell[(i + 1)..], out int power))
+                return false;
+            exponent += power;
+        }
+        else if (i < cell.Length)
+            return false;
+
+        lastDigit = exponent;
+        if (digits > 19 || significand > ExactDigits || exponent is < -ExactPower or > ExactPower)
+            return Slow(cell, mark, out value);
+        double exact = significand;
+        exact = exponent < 0 ? exact / s_powers[-exponent] : exact * s_powers[exponent];
+        value = negative ? -exact : exact;
+        return true;
+    }
+
+    private static bool TryExponent(ReadOnlySpan<byte> text, out int power)
+    {
+        power = 0;
+        bool negative = text.Length > 0 && text[0] == '-';
+        if (negative || (text.Length > 0 && text[0] == '+'))
+            text = text[1..];
+        foreach (byte b in text)
+        {
+            if ((uint)(b - '0') > 9)
+                return false;
+            power = Math.Min(power * 10 + (b - '0'), 100_000);
+        }
+        if (negative)
+            power = -power;
+        return text.Length > 0;
+    }
+
+    private static bool Slow(ReadOnlySpan<byte> cell, byte mark, out double value)
+    {
+        Span<byte> point = stackalloc byte[LongestNumber];
+        cell.CopyTo(point);
+        point = point[..cell.Length];
+        if (mark != '.')
+            point.Replace(mark, (byte)'.');
+        return double.TryParse(point, NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint | NumberStyles.AllowExponent, CultureInfo.InvariantCulture, out value);
+    }
+}

@@ -1,0 +1,62 @@
+using CsvHelper;
+
+namespace ScopeReader.Files.Structure;
+
+/// <summary>Lines of text taken apart into cells.</summary>
+internal static class RowSplitter
+{
+    /// <summary>The delimiter that stands for one or more spaces or tabs.</summary>
+    public const char Spaces = ' ';
+
+    /// <summary>Whole lines in cells, one entry a line.</summary>
+    public static List<string[]> Split(ReadOnlyMemory<byte> lines, char delimiter)
+    {
+        var rows = new List<string[]>();
+        if (delimiter == Spaces)
+        {
+            foreach (Range line in lines.Span.Split((byte)'\n'))
+                rows.Add(System.Text.Encoding.UTF8.GetString(lines.Span[line]).Split([' ', '\t', '\r'], StringSplitOptions.RemoveEmptyEntries));
+            return rows;
+        }
+        // A quote that opens a value of the preamble must not swallow the lines that follow.
+        using CsvReader reader = CsvReader.Create(lines, new CsvReaderOptions { Separator = delimiter, HasHeader = false, SkipEmptyLines = false, AllowLineBreaksInQuotes = false });
+        while (reader.Read())
+        {
+            string[] cells = new string[reader.FieldCount];
+            for (int i = 0; i < cells.Length; i++)
+                cells[i] = reader.GetString(i).Trim();
+            rows.Add(cells is [""] ? [] : cells);
+        }
+        return rows;
+    }
+
+    /// <summary>Finds the next cell of a line; false where there is none left.</summary>
+    /// <param name="line">UTF-8 without its line end.</param>
+    /// <param name="delimiter">The character between cells.</param>
+    /// <param name="position">Where to look from: 0 for the first cell; set behind the cell and its delimiter.</param>
+    /// <param name="cell">The cell, quotes and spaces and all.</param>
+    public static bool Next(ReadOnlySpan<byte> line, char delimiter, ref int position, out ReadOnlySpan<byte> cell)
+    {
+        cell = default;
+        if (position > line.Length)
+            return false;
+        ReadOnlySpan<byte> rest = line[position..];
+        if (delimiter == Spaces)
+        {
+            int start = rest.IndexOfAnyExcept(" \t\r"u8);
+            if (start < 0)
+                return false;
+            int length = rest[start..].IndexOfAny(" \t\r"u8);
+            cell = length < 0 ? rest[start..] : rest.Slice(start, length);
+            position += start + cell.Length;
+            return true;
+        }
+        int from = 0, text = rest.IndexOfAnyExcept((byte)' ');
+        if (text >= 0 && rest[text] == '"' && rest[(text + 1)..].IndexOf((byte)'"') is >= 0 and int close)
+            from = text + close + 2;
+        int end = rest[from..].IndexOf((byte)delimiter);
+        cell = end < 0 ? rest : rest[..(from + end)];
+        position += cell.Length + 1;
+        return true;
+    }
+}

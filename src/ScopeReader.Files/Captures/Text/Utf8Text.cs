@@ -1,0 +1,75 @@
+using System.IO.Compression;
+using System.Text;
+
+namespace ScopeReader.Files.Text;
+
+/// <summary>A file's bytes as UTF-8 text, whatever they were: gzip, UTF-16, Latin-1, with a byte-order mark or without.</summary>
+internal sealed class Utf8Text : IDisposable
+{
+    private const int SniffLength = 1 << 16;
+    private const byte Gzip1 = 0x1F, Gzip2 = 0x8B;
+
+    private readonly HashingStream _hashing;
+    private readonly Stream _text;
+
+    /// <param name="stream">The file's bytes; disposed with this.</param>
+    /// <param name="file">Its name, for messages.</param>
+    /// <param name="encoding">The encoding's name, where the person gave one.</param>
+    /// <exception cref="ImportException">Empty, binary, or an unknown encoding name.</exception>
+    public Utf8Text(Stream stream, string file, string? encoding)
+    {
+        _hashing = new HashingStream(stream);
+        byte[] head = Sniff(_hashing);
+        Stream bytes = new PrefixedStream(head, _hashing);
+        string compressed = "";
+        if (head.Length > 2 && head[0] == Gzip1 && head[1] == Gzip2)
+        {
+            bytes = new GZipStream(bytes, CompressionMode.Decompress);
+            head = Sniff(bytes);
+            bytes = new PrefixedStream(head, bytes);
+            compressed = "gzip, ";
+        }
+        if (head.Length == 0)
+            throw new ImportException(file, "expected a table of numbers, found an empty file. Save the capture again.");
+
+        TextEncoding found = encoding is null ? TextEncoding.Of(head) : TextEncoding.Named(encoding)
+            ?? throw new ImportException(file, $"expected an encoding of utf-8, utf-16, utf-16be or latin-1, found \"{Excerpt.Of(encoding)}\". Correct encoding under [import].");
+        if (!found.IsWide && IsBinary(head))
+            throw new ImportException(file, "expected a table of numbers as text, found binary data. Export the capture as CSV.");
+        bytes.ReadExactly(new byte[found.MarkLength(head)]);
+        _text = found.Encoding is { } other ? Encoding.CreateTranscodingStream(bytes, other, Encoding.UTF8) : bytes;
+        EncodingName = compressed + found.Name;
+    }
+
+    /// <summary>How the text was encoded.</summary>
+    public string EncodingName { get; }
+
+    /// <summary>Reads some text; 0 at its end.</summary>
+    public int Read(Span<byte> into) => _text.Read(into);
+
+    /// <summary>SHA-256 of the file's bytes.</summary>
+    public string Finish() => _hashing.Finish();
+
+    public void Dispose()
+    {
+        _text.Dispose();
+        _hashing.Dispose();
+    }
+
+    private static byte[] Sniff(Stream stream)
+    {
+        byte[] head = new byte[SniffLength];
+        int count = stream.ReadAtLeast(head, head.Length, throwOnEndOfStream: false);
+        return head[..count];
+    }
+
+    // Text has tabs and line ends and, in old exports, a form feed or an end-of-file mark; nothing else below the space.
+    private static bool IsBinary(ReadOnlySpan<byte> head)
+    {
+        int controls = 0;
+        foreach (byte b in head)
+            if (b < 0x20 && b is not (9 or 10 or 12 or 13 or 26))
+                controls++;
+        return controls > 3 + head.Length / 100 || (controls > 0 && head.Contains((byte)0));
+    }
+}
