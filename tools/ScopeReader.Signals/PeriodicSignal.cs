@@ -2,8 +2,8 @@ namespace ScopeReader.Signals;
 
 /// <summary>A Fourier series played at a frequency, from a table of one period.</summary>
 /// <remarks>
-/// Between table points a cubic through both values and both slopes: its error is at most h⁴/384·max|x''''|. With 128 steps
-/// in the standard deviation of a Gaussian edge that is under 1e-11 of the swing.
+/// Between table points a cubic through both values and both slopes: its error is at most h⁴/384·max|x''''|. With 64 steps
+/// in the standard deviation of a Gaussian edge that is under 1e-10 of the swing.
 /// </remarks>
 public sealed class PeriodicSignal : ISignal
 {
@@ -19,7 +19,7 @@ public sealed class PeriodicSignal : ISignal
         ArgumentOutOfRangeException.ThrowIfLessThan(finest, 1e-5);
         (Frequency, Series) = (frequency, series);
         int steps = 1024;
-        while (steps < Math.Max(128 / finest, 4 * series.Coefficients.Length))
+        while (steps < Math.Max(64 / finest, 4 * series.Coefficients.Length))
             steps *= 2;
         (_values, _slopes) = series.Tabulate(steps);
     }
