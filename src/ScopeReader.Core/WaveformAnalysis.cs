@@ -1,3 +1,7 @@
+using ScopeReader.Edges;
+using ScopeReader.Frequency;
+using ScopeReader.Levels;
+
 namespace ScopeReader;
 
 /// <summary>The order in which a waveform is measured: each stage builds on the ones before.</summary>
@@ -7,5 +11,17 @@ public static class WaveformAnalysis
     public static void Measure(WaveformJob job)
     {
         ArgumentNullException.ThrowIfNull(job);
+        ReadOnlySpan<double> samples = job.Waveform.Samples;
+
+        WaveShape shape = WaveShapeAnalyser.Look(samples);
+        job.Cancellation.ThrowIfCancellationRequested();
+        StateLevels? states = StateLevelAnalyser.Measure(job, shape);
+        (double low, double high) = states is null ? (shape.Lower, shape.Upper) : (states.Low, states.High);
+        double noise = states?.Noise ?? shape.Noise;
+        IReadOnlyList<Transition> transitions = shape.Kind == WaveKind.Flat ? [] : Transitions.Find(samples, low, high, noise);
+        job.Cancellation.ThrowIfCancellationRequested();
+
+        CrossingFrequency? crossings = CrossingFrequency.Measure(samples, transitions, low, high, noise, shape);
+        MeasuredFrequency? frequency = FrequencyAnalyser.Measure(job, shape, crossings, transitions.Count);
     }
 }

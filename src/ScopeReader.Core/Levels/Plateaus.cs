@@ -1,0 +1,46 @@
+using ScopeReader.Edges;
+
+namespace ScopeReader.Levels;
+
+/// <summary>Cuts a two-state wave into the stretches that its levels are read on.</summary>
+/// <remarks>
+/// Of each whole plateau the later half, less one and a half transition durations before the next edge (there a Gaussian
+/// edge is within 1e-4 of its state). Where the edges leave less than a fifth of the plateau, its middle fifth.
+/// </remarks>
+internal static class Plateaus
+{
+    private const double Guard = 1.5, LeastShare = 0.2;
+
+    /// <summary>The stretches; those of plateaus that the record cuts off only for a state that has no whole one.</summary>
+    /// <param name="count">Samples in the record.</param>
+    /// <param name="transitions">Its transitions, in order.</param>
+    /// <param name="duration">Their 10 to 90 % duration, samples.</param>
+    public static IReadOnlyList<Plateau> Find(int count, IReadOnlyList<Transition> transitions, double duration)
+    {
+        var found = new List<Plateau>();
+        for (int i = 1; i < transitions.Count; i++)
+        {
+            double from = transitions[i - 1].Instant, to = transitions[i].Instant, length = to - from;
+            double trail = Math.Min(Guard * duration, (1 - LeastShare) / 2 * length);
+            double lead = Math.Max(trail, Math.Min(length / 2, (1 - LeastShare) * length - trail));
+            Add(found, transitions[i - 1].IsRising, from + lead, to - trail, count);
+        }
+        if (transitions.Count == 0)
+            return found;
+
+        Transition first = transitions[0], last = transitions[^1];
+        // Nothing is known of an edge before the record: all of it up to the first edge counts.
+        if (!found.Exists(p => p.IsHigh != first.IsRising))
+            Add(found, !first.IsRising, 0, first.Instant - Guard * duration, count);
+        if (!found.Exists(p => p.IsHigh == last.IsRising))
+            Add(found, last.IsRising, last.Instant + Math.Max(Guard * duration, (count - last.Instant) / 2), count, count);
+        return found;
+    }
+
+    private static void Add(List<Plateau> found, bool isHigh, double from, double to, int count)
+    {
+        int first = Math.Max(0, (int)Math.Ceiling(from)), end = Math.Min(count, (int)Math.Floor(to) + 1);
+        if (end > first)
+            found.Add(new Plateau(isHigh, first, end));
+    }
+}
