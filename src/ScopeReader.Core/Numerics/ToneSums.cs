@@ -1,0 +1,64 @@
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
+
+namespace ScopeReader.Numerics;
+
+/// <summary>Sums of samples times a tone, the instants t counted from the middle of the record.</summary>
+/// <param name="Cosine">Σ y cos(2πft).</param>
+/// <param name="Sine">Σ y sin(2πft).</param>
+/// <param name="TimeCosine">Σ t y cos(2πft).</param>
+/// <param name="TimeSine">Σ t y sin(2πft).</param>
+/// <remarks>
+/// One pass: blocks are multiplied with one table of the tone, and each block's sum is turned to its place by an exact phase,
+/// so that no recurrence gathers rounding errors.
+/// </remarks>
+public readonly record struct ToneSums(double Cosine, double Sine, double TimeCosine, double TimeSine)
+{
+    private const int Block = 256;
+
+    /// <summary>The sums over a record.</summary>
+    /// <param name="samples">Shape [n].</param>
+    /// <param name="frequency">Cycles per sample.</param>
+    public static ToneSums Of(ReadOnlySpan<double> samples, double frequency)
+    {
+        var cosine = new double[Block];
+        var sine = new double[Block];
+        var timeCosine = new double[Block];
+        var timeSine = new double[Block];
+        for (int j = 0; j < Block; j++)
+        {
+            (cosine[j], sine[j]) = Turn.Of(frequency, j);
+            (timeCosine[j], timeSine[j]) = (j * cosine[j], j * sine[j]);
+        }
+        double middle = (samples.Length - 1) / 2.0;
+        var total = default(ToneSums);
+        for (int start = 0; start < samples.Length; start += Block)
+        {
+            ReadOnlySpan<double> block = samples.Slice(start, Math.Min(Block, samples.Length - start));
+            double c = Dot(block, cosine), s = Dot(block, sine), tc = Dot(block, timeCosine), ts = Dot(block, timeSine);
+            double t = start - middle;
+            (double c0, double s0) = Turn.Of(frequency, t);
+            double blockCosine = c0 * c - s0 * s, blockSine = s0 * c + c0 * s;
+            total = new ToneSums(total.Cosine + blockCosine, total.Sine + blockSine,
+                total.TimeCosine + t * blockCosine + c0 * tc - s0 * ts, total.TimeSine + t * blockSine + s0 * tc + c0 * ts);
+        }
+        return total;
+    }
+
+    // Four running sums whatever the processor has, so that the last bits do not depend on it.
+    private static double Dot(ReadOnlySpan<double> a, ReadOnlySpan<double> b)
+    {
+        ref double x = ref MemoryMarshal.GetReference(a), y = ref MemoryMarshal.GetReference(b);
+        Vector256<double> first = Vector256<double>.Zero, second = Vector256<double>.Zero;
+        int i = 0;
+        for (; i + 8 <= a.Length; i += 8)
+        {
+            first += Vector256.LoadUnsafe(ref x, (nuint)i) * Vector256.LoadUnsafe(ref y, (nuint)i);
+            second += Vector256.LoadUnsafe(ref x, (nuint)(i + 4)) * Vector256.LoadUnsafe(ref y, (nuint)(i + 4));
+        }
+        double sum = Vector256.Sum(first + second);
+        for (; i < a.Length; i++)
+            sum += a[i] * b[i];
+        return sum;
+    }
+}

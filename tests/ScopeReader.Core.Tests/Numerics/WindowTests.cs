@@ -1,0 +1,81 @@
+using ScopeReader.Numerics;
+
+namespace ScopeReader.Tests.Numerics;
+
+public class WindowTests
+{
+    public static TheoryData<string, double, double> NoiseBandwidths => new()
+    {
+        { "Hann", 1.5, 1e-9 }, // E18, closed form
+        { "Blackman-Harris", 2.0044, 1e-4 }, // E28, Heinzel et al. 2002
+        { "HFT90D", 3.8832, 1e-4 }, // E35, Heinzel et al. 2002 (from memory)
+    };
+
+    public static TheoryData<string, double, double> HighestSidelobes => new()
+    {
+        { "Hann", -31.47, 0.01 }, // E21, Harris 1978
+        { "Blackman-Harris", -92, 0.05 }, // E31, Heinzel et al. 2002
+        { "HFT90D", -90.2, 0.05 }, // E36, Heinzel et al. 2002
+    };
+
+    // Tolerances in both tables: half a step of the last digit printed, as checks of the same rows have it.
+    [Theory]
+    [MemberData(nameof(NoiseBandwidths))]
+    public void Noise_bandwidth_is_the_published_one_by_coefficients_and_by_values(string name, double expected, double tolerance)
+    {
+        Window window = Named(name);
+        double[] values = window.Values(2048);
+        Assert.Equal(expected, window.NoiseBandwidth, tolerance);
+        Assert.Equal(expected, values.Length * values.Sum(v => v * v) / Math.Pow(values.Sum(), 2), tolerance);
+    }
+
+    [Theory]
+    [MemberData(nameof(HighestSidelobes))]
+    public void Highest_sidelobe_is_the_published_one(string name, double expected, double tolerance)
+    {
+        Window window = Named(name);
+        // Beyond the main lobe, whose first zero is at the number of terms.
+        double first = name switch { "Hann" => 2, "Blackman-Harris" => 4, _ => 5 }, highest = 0;
+        for (double d = first; d < 40; d += 0.001)
+            highest = Math.Max(highest, Math.Abs(window.Response(d)));
+        Assert.Equal(expected, 20 * Math.Log10(highest), tolerance);
+    }
+
+    [Theory]
+    [InlineData("Hann", 1.4236)] // E19, Heinzel et al. 2002
+    [InlineData("Blackman-Harris", 0.8256)] // E29
+    public void Scalloping_loss_is_the_published_one(string name, double expected) =>
+        Assert.Equal(-expected, 20 * Math.Log10(Named(name).Response(0.5)), 1e-4);
+
+    [Fact]
+    public void Flat_top_reads_an_amplitude_to_a_few_thousandths_of_a_decibel_anywhere_in_its_bin()
+    {
+        // E41: 0.0039 dB, Heinzel et al. 2002 (from memory); half of the last digit.
+        double worst = 0;
+        for (double d = 0; d <= 0.5; d += 0.001)
+            worst = Math.Max(worst, Math.Abs(20 * Math.Log10(Window.FlatTop.Response(d))));
+        Assert.Equal(0.0039, worst, 1e-4);
+    }
+
+    [Theory]
+    [InlineData("Hann", 1.4382)] // E20
+    [InlineData("Blackman-Harris", 1.8962)] // E30
+    public void Three_decibel_width_is_the_published_one(string name, double expected)
+    {
+        Window window = Named(name);
+        double low = 0, high = 2;
+        for (int i = 0; i < 50; i++)
+            (low, high) = 20 * Math.Log10(window.Response((low + high) / 2)) > -3 ? ((low + high) / 2, high) : (low, (low + high) / 2);
+        Assert.Equal(expected, 2 * low, 1e-4);
+    }
+
+    [Fact]
+    public void Coherent_gain_is_the_mean_of_the_values()
+    {
+        Assert.Equal(0.35875, Window.BlackmanHarris.CoherentGain, 1e-12); // E32, Harris 1978
+        // The cosines add up to nothing over whole cycles; 2048 roundings of 1.1e-16.
+        Assert.Equal(0.35875, Window.BlackmanHarris.Values(2048).Average(), 1e-13);
+    }
+
+    private static Window Named(string name) => new[] { Window.Hann, Window.BlackmanHarris, Window.FlatTop }.Single(w => w.Name == name);
+}
