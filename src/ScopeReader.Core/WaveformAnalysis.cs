@@ -1,6 +1,7 @@
 using ScopeReader.Edges;
 using ScopeReader.Frequency;
 using ScopeReader.Levels;
+using ScopeReader.Ringing;
 
 namespace ScopeReader;
 
@@ -23,5 +24,9 @@ public static class WaveformAnalysis
 
         CrossingFrequency? crossings = CrossingFrequency.Measure(samples, transitions, low, high, noise, shape);
         MeasuredFrequency? frequency = FrequencyAnalyser.Measure(job, shape, crossings, transitions.Count);
+        job.Cancellation.ThrowIfCancellationRequested();
+
+        IReadOnlyList<MeasuredEdge> edges = EdgeAnalyser.Measure(job, states, shape.Step, transitions, frequency?.Grid);
+        RingingAnalyser.Measure(job, edges);
     }
 }

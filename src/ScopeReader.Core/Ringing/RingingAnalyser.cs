@@ -1,0 +1,82 @@
+using System.Globalization;
+using ScopeReader.Edges;
+using ScopeReader.Readings;
+
+namespace ScopeReader.Ringing;
+
+/// <summary>Frequency, damping and amplitude of the ringing after the edges, by a damped-sinusoid fit to the averaged edge.</summary>
+/// <remarks>
+/// There is ringing where a damped sinusoid explains the averaged edge far better than a level, a slope or an exponential
+/// does, from two starts, and stands out of the noise. Uncertainties: the fit's covariance, scaled by its own residuals; the
+/// change with a later start where noise does not explain it; the states for the amplitude. After both polarities, the
+/// rising edge's fit is primary.
+/// </remarks>
+public static class RingingAnalyser
+{
+    private static readonly Quantity[] All =
+        [Quantities.RingingFrequency, Quantities.RingingDampingRatio, Quantities.RingingQ, Quantities.RingingDecayTime, Quantities.RingingAmplitude];
+
+    /// <summary>Measures the ringing after the edges.</summary>
+    /// <param name="job">The job.</param>
+    /// <param name="edges">The averaged edges, as <see cref="EdgeAnalyser"/> gives them.</param>
+    public static void Measure(WaveformJob job, IReadOnlyList<MeasuredEdge> edges)
+    {
+        ArgumentNullException.ThrowIfNull(job);
+        ArgumentNullException.ThrowIfNull(edges);
+        if (edges.Count == 0)
+        {
+            job.Sheet.Refuse("no-edge", "there is no edge that could have set anything ringing", All);
+            return;
+        }
+        bool isPrimary = true;
+        foreach (MeasuredEdge edge in edges)
+        {
+            job.Cancellation.ThrowIfCancellationRequested();
+            if (EdgeRinging.Find(edge) is not { } ringing)
+                continue;
+            Report(job, edge, ringing, isPrimary);
+            if (isPrimary)
+                RingingFindings.Ringing(job, edge);
+            isPrimary = false;
+        }
+        if (isPrimary)
+            job.Sheet.Refuse("no-ringing", string.Create(CultureInfo.InvariantCulture,
+                $"no ringing above {100 * edges.Min(EdgeRinging.Floor):0.####} % of amplitude after the edges"), All);
+    }
+
+    private static void Report(WaveformJob job, MeasuredEdge edge, EdgeRinging ringing, bool isPrimary)
+    {
+        double toTime = job.Waveform.Interval * job.Chain.TimeFactor;
+        var (frequency, uf) = ringing.Read(EdgeRinging.Of.Frequency);
+        var (decay, ua) = ringing.Read(EdgeRinging.Of.Decay);
+        var (ratio, uz) = ringing.Read(EdgeRinging.Of.DampingRatio);
+        var (amplitude, ur) = ringing.Read(EdgeRinging.Of.Amplitude);
+        double zetaShift = ratio * (ringing.DecayShift / decay + ringing.FrequencyShift / frequency);
+
+        double hertz = frequency / toTime, time = toTime / decay;
+        Add(Quantities.RingingFrequency, hertz, job.Waveform.Axis.FrequencyUnit, job.Chain.ForTime(hertz, Own(uf, ringing.FrequencyShift, 1 / toTime)));
+        Add(Quantities.RingingDampingRatio, ratio, "1", new Budget(Own(uz, zetaShift, 1)));
+        double perRatio = -1 / (2 * ratio * ratio);
+        Add(Quantities.RingingQ, SecondOrder.Quality(ratio), "1", new Budget(Own(uz, zetaShift, perRatio)));
+        Add(Quantities.RingingDecayTime, time, job.Waveform.Axis.TimeUnit, job.Chain.ForTime(time, Own(ua, ringing.DecayShift, -time / decay)));
+        Add(Quantities.RingingAmplitude, 100 * amplitude, "%", new Budget([
+            .. Own(ur, ringing.AmplitudeShift, 100),
+            .. EdgeTimes.Present(
+                BudgetTerm.Normal("states", double.Hypot(edge.BeforeUncertainty, edge.AfterUncertainty), 100 * amplitude),
+                BudgetTerm.Normal("50 % instant", edge.MiddleUncertainty, 100 * amplitude * decay)),
+        ]));
+
+        IEnumerable<BudgetTerm> Own(double u, double shift, double sensitivity) => EdgeTimes.Present(
+            BudgetTerm.Normal("fit", u, sensitivity, ringing.Fit.DegreesOfFreedom),
+            BudgetTerm.Rectangular("start", shift, sensitivity));
+
+        void Add(Quantity quantity, double value, string unit, Budget budget) =>
+            job.Sheet.Add(new Reading(quantity, value, unit, budget, edge.Edge.IsRising ? "rising-edge-fit" : "falling-edge-fit")
+            {
+                IsPrimary = isPrimary,
+                Count = edge.Edge.Edges,
+                Note = string.Create(CultureInfo.InvariantCulture,
+                    $"fitted from {Engineering.Format(ringing.Start * toTime, job.Waveform.Axis.TimeUnit, 3)} after the 50 % instant, {edge.Edge.Edges} {(edge.Edge.Edges == 1 ? "edge" : "edges averaged")}"),
+            });
+    }
+}
