@@ -1,5 +1,4 @@
 using ScopeReader.Captures;
-using ScopeReader.Files.Meaning;
 using ScopeReader.Files.Rows;
 using ScopeReader.Files.Structure;
 using ScopeReader.Files.Text;
@@ -9,8 +8,6 @@ namespace ScopeReader.Files;
 /// <summary>The way from a file's bytes to a <see cref="Capture"/>: find the block of numbers, read round it, read it, fit its axis.</summary>
 public static class CaptureReader
 {
-    private const int Head = 1 << 16, LongestPreamble = 8 << 20, EnoughRows = 10;
-
     /// <summary>Reads a file; <c>-</c> is standard input.</summary>
     /// <param name="path">The file as the person named it.</param>
     /// <param name="settings">What the person says about it.</param>
@@ -64,60 +61,33 @@ public static class CaptureReader
 
     private static CaptureFile Read(Utf8Text text, string file, ImportSettings settings, double scale, CancellationToken cancellation)
     {
-        var window = new TextWindow(text, file);
-        TableShape shape = FindTable(window, file, settings);
-        Header header = Header.Read(shape);
-        var table = new Table(shape, header, Roles.Of(shape, header.Labels, settings), shape.First + 1);
-        SkipLines(window, shape.First);
-        new RowReader(window, file, table).Read(cancellation);
-
-        var doubts = new List<string>();
-        if (table.IsCut)
-            doubts.Add("the last line breaks off: it was left out");
-        var builder = new ChannelBuilder(file, table, settings, scale, doubts);
-        builder.Build();
+        var sequence = new TableSequence(new TextWindow(text, file), file, settings);
+        var capture = new CaptureBuilder(file, settings, scale);
+        Table? first = null;
+        while (sequence.Next(cancellation) is { } table)
+        {
+            first ??= table;
+            capture.Add(table);
+            if (table.IsCut)
+                capture.Doubts.Add("the last line breaks off: it was left out");
+        }
+        if (capture.Channels.Count == 0)
+            throw new ImportException(file, FormattableString.Invariant($"expected a segment {settings.Segment}, found none of that number. Run inspect to see the segments."));
         return new CaptureFile(
-            new Capture(file, text.Finish(), builder.Channels, doubts),
+            new Capture(file, text.Finish(), capture.Channels, capture.Doubts),
             new ImportReport
             {
                 File = file,
                 Encoding = text.EncodingName,
-                Delimiter = NameOf(shape),
-                DecimalMark = shape.Mark.ToString(),
-                PreambleLines = header.FirstRow,
-                HeaderRows = header.Rows,
-                FirstLine = table.FirstLine,
-                Axis = builder.Axis,
-                Channels = builder.Reports,
-                Doubts = doubts,
+                Delimiter = NameOf(first!.Shape),
+                DecimalMark = first.Shape.Mark.ToString(),
+                PreambleLines = first.Header.FirstRow,
+                HeaderRows = first.Header.Rows,
+                FirstLine = first.FirstLine,
+                Axis = capture.Axis!,
+                Channels = capture.Reports,
+                Doubts = capture.Doubts,
             });
-    }
-
-    private static TableShape FindTable(TextWindow window, string file, ImportSettings settings)
-    {
-        for (int head = Head; ; head *= 2)
-        {
-            while (window.Pending.Length < head && window.Fill())
-            {
-            }
-            ReadOnlyMemory<byte> lines = window.PendingMemory[..Math.Min(head, window.Pending.Length)];
-            bool whole = window.Ended && lines.Length == window.Pending.Length;
-            if (!whole)
-                lines = lines[..(lines.Span.LastIndexOf((byte)'\n') + 1)];
-            TableShape? shape = TableFinder.Find(lines, settings);
-            if (shape is not null && (whole || shape.Sampled >= EnoughRows))
-                return shape;
-            if (whole || head >= LongestPreamble)
-                throw new ImportException(file, $"expected a table of numbers, found only text: \"{Excerpt.Of(window.Pending)}\". Export the capture as CSV.");
-        }
-    }
-
-    private static void SkipLines(TextWindow window, int lines)
-    {
-        int bytes = 0;
-        for (int i = 0; i < lines; i++)
-            bytes += window.Pending[bytes..].IndexOf((byte)'\n') + 1;
-        window.Consume(bytes, lines);
     }
 
     private static string NameOf(TableShape shape) => shape switch

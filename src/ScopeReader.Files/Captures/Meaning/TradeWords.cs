@@ -9,13 +9,25 @@ internal static class TradeWords
         ["index", "n", "no", "no.", "nr", "nr.", "#", "point", "points", "sample", "samples", "count", "number", "x", "row", "punkt", "punkte", "abtastwert", "muestra", "échantillon", "campione", "amostra", "próbka", "序号", "点", "番号"];
 
     /// <summary>True where a column's name says that it holds times.</summary>
-    public static bool IsTime(string name) => name is "t" or "T" || Mentions(name, s_time);
+    public static bool IsTime(string name) => name is "T" || HasLetter(name, 't') || Mentions(name, s_time);
 
     /// <summary>True where a column's name says that it holds frequencies.</summary>
-    public static bool IsFrequency(string name) => name is "f" or "F" || Mentions(name, s_frequency);
+    public static bool IsFrequency(string name) => name is "F" || HasLetter(name, 'f') || Mentions(name, s_frequency);
 
     /// <summary>True where a column's name says that it numbers the rows.</summary>
     public static bool IsIndex(string name) => s_index.Contains(name.Trim(), StringComparer.OrdinalIgnoreCase);
+
+    /// <summary>True where a column's name is that of an axis.</summary>
+    public static bool IsAxis(string name) => IsTime(name) || IsFrequency(name) || IsIndex(name);
+
+    // The formula letter as a word of its own: "t", "A t", "t_2".
+    private static bool HasLetter(string name, char letter)
+    {
+        for (int at = name.IndexOf(letter); at >= 0; at = name.IndexOf(letter, at + 1))
+            if ((at == 0 || name[at - 1] is ' ' or '_') && (at == name.Length - 1 || name[at + 1] is ' ' or '_') && name.Length < 12)
+                return true;
+        return false;
+    }
 
     // A word counts at the start or the end of a name ("Time 1", "rel. time"), but not inside another word ("sometimes").
     private static bool Mentions(string name, string[] words)

@@ -63,6 +63,9 @@ internal static class UnitWords
         ["Vpp"] = (1, "V"),
     };
 
+    /// <summary>A value in the base unit. A small prefix is divided by its exact inverse: 12.5 mV is then the double nearest to 0.0125.</summary>
+    public static double Scale(double value, double factor) => factor < 1 ? value / Math.Round(1 / factor) : value * factor;
+
     /// <summary>Takes a unit as written apart into its factor and its base unit; false for any other word.</summary>
     public static bool TryRead(string text, out double factor, out string unit)
     {

@@ -58,6 +58,36 @@ internal static class NumberParser
         return true;
     }
 
+    /// <summary>Length of the number that a cell begins with; 0 where it begins with none.</summary>
+    public static int Length(ReadOnlySpan<byte> cell, byte mark)
+    {
+        int i = cell.Length > 0 && (cell[0] is (byte)'-' or (byte)'+') ? 1 : 0, digits = 0;
+        for (bool marked = false; i < cell.Length; i++)
+        {
+            if (char.IsAsciiDigit((char)cell[i]))
+                digits++;
+            else if (cell[i] == mark && !marked)
+                marked = true;
+            else
+                break;
+        }
+        if (digits == 0)
+            return 0;
+        // An exponent counts only with digits, so that "2e" stays a 2 with something behind it.
+        int e = i + 1;
+        if (i < cell.Length && (cell[i] | 0x20) == 'e')
+        {
+            if (e < cell.Length && (cell[e] is (byte)'-' or (byte)'+'))
+                e++;
+            int first = e;
+            while (e < cell.Length && char.IsAsciiDigit((char)cell[e]))
+                e++;
+            if (e > first)
+                i = e;
+        }
+        return i;
+    }
+
     private static bool TryExponent(ReadOnlySpan<byte> text, out int power)
     {
         power = 0;

@@ -1,94 +1,207 @@
+using System.Text;
 using ScopeReader.Files.Meaning;
+using ScopeReader.Files.Numbers;
 using ScopeReader.Files.Structure;
 using ScopeReader.Files.Text;
 
 namespace ScopeReader.Files.Rows;
 
-/// <summary>Reads the rows of a block of numbers.</summary>
-internal sealed class RowReader
+/// <summary>Reads the rows of a block of numbers, to its end or the file's.</summary>
+internal sealed class RowReader(TextWindow text, string file, Table table)
 {
-    private readonly TextWindow _text;
-    private readonly string _file;
-    private readonly Table _table;
-    private readonly int _width;
-    private readonly double[] _values;
-    private readonly int[] _lastDigits;
+    private readonly TableShape _shape = table.Shape;
+    private readonly double[] _values = new double[table.Shape.Columns.Length], _halves = new double[table.Shape.Columns.Length];
+    private Cell[] _cells = new Cell[16];
+    private int _count, _filled, _shortest = int.MaxValue, _longest;
+    private bool _blankBefore;
 
-    public RowReader(TextWindow text, string file, Table table)
+    private enum Outcome
     {
-        (_text, _file, _table) = (text, file, table);
-        TableShape shape = table.Shape;
-        _width = shape.Rows[shape.First].Length;
-        (_values, _lastDigits) = (new double[shape.Columns.Length], new int[shape.Columns.Length]);
+        Row,
+        Skipped,
+        End,
     }
 
-    /// <summary>Reads to the end of the file.</summary>
+    /// <summary>Reads the block; what follows it stays in the window.</summary>
     /// <exception cref="ImportException">A row is not built as the others are.</exception>
     public void Read(CancellationToken cancellation)
     {
         do
         {
             cancellation.ThrowIfCancellationRequested();
-            ReadOnlySpan<byte> pending = _text.Pending;
+            ReadOnlySpan<byte> pending = text.Pending;
             int done = 0;
             long lines = 0;
-            for (int end; (end = pending[done..].IndexOf((byte)'\n')) >= 0; done += end + 1, lines++)
-                ReadRow(pending.Slice(done, end), _text.Line + lines, isLast: false);
-            _text.Consume(done, lines);
+            bool ended = false;
+            for (int end; !ended && (end = pending[done..].IndexOf((byte)'\n')) >= 0;)
+            {
+                ended = ReadLine(pending.Slice(done, end), pending[(done + end + 1)..], text.Line + lines) == Outcome.End;
+                if (!ended)
+                    (done, lines) = (done + end + 1, lines + 1);
+            }
+            text.Consume(done, lines);
+            if (ended)
+                return;
         }
-        while (_text.Fill());
-        if (!_text.Pending.IsEmpty)
-            ReadRow(_text.Pending, _text.Line, isLast: true);
+        while (text.Fill());
+        if (!text.Pending.IsEmpty && ReadLast(text.Pending) != Outcome.End)
+            text.Consume(text.Pending.Length, 1);
     }
 
-    private void ReadRow(ReadOnlySpan<byte> line, long number, bool isLast)
+    private Outcome ReadLine(ReadOnlySpan<byte> line, ReadOnlySpan<byte> following, long number)
     {
-        TableShape shape = _table.Shape;
-        line = line.TrimEnd("\r\u001A"u8);
-        int cells = 0, taken = 0, filled = 0, position = 0;
-        bool isTooLong = false;
-        for (; RowSplitter.Next(line, shape.Delimiter, ref position, out ReadOnlySpan<byte> cell); cells++)
+        Take(line, number);
+        if (_filled == 0)
         {
-            if (Cell.Trim(cell).Length > 0)
-                filled = cells + 1;
-            if (taken == shape.Columns.Length || shape.Columns[taken] != cells)
+            _blankBefore = true;
+            return Outcome.Skipped;
+        }
+        ReadOnlySpan<Cell> cells = _cells.AsSpan(0, _count);
+        if (IsRow(cells, out Cell wrong, out int wrongAt))
+        {
+            (_shortest, _longest) = (Math.Min(_shortest, line.Length), Math.Max(_longest, line.Length));
+            AddRow();
+            return Outcome.Row;
+        }
+        if (line[line.IndexOfAnyExcept(" \t\""u8)] is (byte)'#' or (byte)'%' or (byte)'!')
+            return Outcome.Skipped;
+        if (EndsBlock(cells, line, following))
+            return Outcome.End;
+        throw Refusal(line, number, wrong, wrongAt);
+    }
+
+    // A last line without its line end may have broken off anywhere, in the middle of a number too.
+    private Outcome ReadLast(ReadOnlySpan<byte> line)
+    {
+        Take(line, text.Line);
+        if (_filled == 0)
+            return Outcome.Skipped;
+        bool isShort = _shortest == _longest && line.TrimEnd((byte)'\r').Length < _shortest - 1 && table.Rows > 2;
+        if (!isShort && IsRow(_cells.AsSpan(0, _count), out _, out _))
+        {
+            AddRow();
+            return Outcome.Row;
+        }
+        if (RowFit.Numbers(_cells.AsSpan(0, _count)).Length == 0 && _cells[0].Kind == CellKind.Text)
+            return Outcome.End;
+        table.IsCut = true;
+        return Outcome.Skipped;
+    }
+
+    private void Take(ReadOnlySpan<byte> line, long number)
+    {
+        line = line.TrimEnd("\r\u001A"u8);
+        (_count, _filled) = (0, 0);
+        int position = 0;
+        while (RowSplitter.Next(line, _shape.Delimiter, ref position, out ReadOnlySpan<byte> cell))
+        {
+            if (_count == RowSplitter.MostCells)
+                throw new ImportException(file, FormattableString.Invariant($"expected lines of at most {RowSplitter.MostCells} cells, found a longer one. Export fewer channels at a time."), number);
+            if (_count == _cells.Length)
+                Array.Resize(ref _cells, 2 * _count);
+            _cells[_count] = Cell.Read(cell, (byte)_shape.Mark);
+            if (_cells[_count].Kind == CellKind.Text && cell.Length > NumberParser.LongestNumber && NumberParser.Length(Cell.Trim(cell), (byte)_shape.Mark) > NumberParser.LongestNumber)
+                throw new ImportException(file, FormattableString.Invariant($"expected numbers of at most {NumberParser.LongestNumber} characters, found a longer one: \"{Excerpt.Of(cell, 20)}\". Export the capture again."), number, _count + 1);
+            if (_cells[_count++].Kind != CellKind.Empty)
+                _filled = _count;
+        }
+        Scale(line);
+    }
+
+    // Where the unit stands in the next column it may change from row to row: 999.5 kHz, 1.0005 MHz.
+    private void Scale(ReadOnlySpan<byte> line)
+    {
+        for (int i = 0; i < _shape.UnitColumns.Length; i++)
+        {
+            int unitAt = _shape.UnitColumns[i], c = _shape.Columns[i];
+            if (unitAt < 0 || unitAt >= _count || _cells[c].Kind != CellKind.Number)
+                continue;
+            if (Label.TryUnit(Encoding.UTF8.GetString(RowSplitter.CellAt(line, _shape.Delimiter, unitAt)), out double factor, out string unit))
+                _cells[c] = _cells[c] with { Value = UnitWords.Scale(_cells[c].Value, factor), Half = _cells[c].Half * factor, Unit = unit };
+        }
+    }
+
+    private bool IsRow(ReadOnlySpan<Cell> cells, out Cell wrong, out int wrongAt)
+    {
+        (wrong, wrongAt) = (default, -1);
+        int numbers = 0;
+        for (int i = 0; i < _shape.Columns.Length; i++)
+        {
+            int c = _shape.Columns[i];
+            if (c >= cells.Length)
             {
-                // Words behind the numbers are notes; a number there has slipped out of its column.
-                isTooLong |= cells >= _width && Cell.Read(cell, (byte)shape.Mark, out _, out _) == CellKind.Number;
+                // A table that stands right of another may end before it, its cells not even written.
+                if (!IsEndOfGroup(i, c))
+                    return false;
+                (_values[i], _halves[i]) = (double.NaN, 0);
                 continue;
             }
-            CellKind kind = Cell.Read(cell, (byte)shape.Mark, out _values[taken], out _lastDigits[taken]);
-            if (kind == CellKind.Text && _table.Roles[taken] != ColumnRole.Skip)
+            if (cells[c].Kind == CellKind.Text && table.Roles[i] != ColumnRole.Skip)
             {
-                if (isLast && IsCut())
-                    return;
-                throw new ImportException(_file, $"expected a number, found \"{Excerpt.Of(cell)}\". Remove the line, or name its columns under [import].", number, cells + 1);
+                (wrong, wrongAt) = (cells[c], c);
+                return false;
             }
-            taken++;
+            (_values[i], _halves[i]) = (cells[c].Value, cells[c].Half);
+            if (cells[c].Kind is CellKind.Number or CellKind.Gap)
+                numbers++;
         }
-        if (filled == 0)
-            return;
-        if (taken < shape.Columns.Length || isTooLong)
-        {
-            if (isLast && taken < shape.Columns.Length && IsCut())
-                return;
-            throw new ImportException(_file, $"expected {Expected()}, found {filled}: \"{Excerpt.Of(line)}\". Export the capture again with all channels in every line.", number);
-        }
+        // Words behind the numbers are notes; a number there has slipped out of its column.
+        for (int c = _shape.Width; c < cells.Length; c++)
+            if (cells[c].Kind == CellKind.Number)
+                return false;
+        return numbers > 0;
+    }
+
+    private bool IsEndOfGroup(int i, int c)
+    {
+        while (i > 0 && !table.IsAxis(i))
+            i--;
+        return i > 0 && _shape.Columns[i] >= _count;
+    }
+
+    private void AddRow()
+    {
+        if (_blankBefore && table.Rows > 0)
+            table.Breaks.Add(table.Rows);
+        _blankBefore = false;
+        int row = table.Rows;
         for (int i = 0; i < _values.Length; i++)
         {
-            _table.Columns[i].Add(_values[i]);
-            if (_table.Roles[i] is ColumnRole.Time or ColumnRole.Frequency or ColumnRole.Index)
-                _table.Spacings[i].Add(_values[i], 0.5 * Math.Pow(10, _lastDigits[i]));
+            table.Columns[i].Add(_values[i]);
+            if (table.IsAxis(i) && !double.IsNaN(_values[i]))
+                table.Spacings[i].Add(row, _values[i], _halves[i]);
         }
     }
 
-    // A last line without its line end is one that was still being written.
-    private bool IsCut() => _table.IsCut = true;
+    // Text ends a block; a row that only lost a cell or has a word in it does not, as long as the next line goes on as before.
+    private bool EndsBlock(ReadOnlySpan<Cell> cells, ReadOnlySpan<byte> line, ReadOnlySpan<byte> following)
+    {
+        bool hasNumbers = _shape.Columns.AsSpan().ContainsAny(RowFit.Numbers(cells));
+        if (!hasNumbers || _blankBefore)
+            return true;
+        if (cells[0].Kind != CellKind.Text)
+            return false;
+        if (Preamble.Says(RowSplitter.Cells(line, _shape.Delimiter)))
+            return true;
+        if (following.IsEmpty && !text.Ended)
+            return false;
+        int end = following.IndexOf((byte)'\n');
+        Take(end < 0 ? following : following[..end], 0);
+        bool goesOn = IsRow(_cells.AsSpan(0, _count), out _, out _);
+        Take(line, 0);
+        return !goesOn;
+    }
+
+    private ImportException Refusal(ReadOnlySpan<byte> line, long number, Cell wrong, int wrongAt)
+    {
+        if (wrongAt < 0)
+            return new ImportException(file, FormattableString.Invariant($"expected {Expected()}, found {_filled}: \"{Excerpt.Of(line)}\". Export the capture again with all channels in every line."), number);
+        return new ImportException(file, $"expected a number, found \"{Excerpt.Of(RowSplitter.CellAt(line, _shape.Delimiter, wrongAt))}\". Remove the line, or name its columns under [import].", number, wrongAt + 1);
+    }
 
     private string Expected()
     {
-        IEnumerable<string> names = _table.Header.Labels.Select(l => Excerpt.Of(l.Name, 20));
-        int count = _table.Shape.Columns.Length;
-        return count == 1 ? "1 column" : names.Any(n => n.Length == 0) ? $"{count} columns" : $"{count} columns ({string.Join(", ", names)})";
+        string[] names = [.. table.Header.Labels.Select(l => Excerpt.Of(l.Name, 20))];
+        return names.Length == 1 ? "1 column" : names.Any(n => n.Length == 0) || names.Length > 8 ? $"{names.Length} columns" : $"{names.Length} columns ({string.Join(", ", names)})";
     }
 }

@@ -1,3 +1,4 @@
+using System.Text;
 using CsvHelper;
 
 namespace ScopeReader.Files.Structure;
@@ -8,20 +9,26 @@ internal static class RowSplitter
     /// <summary>The delimiter that stands for one or more spaces or tabs.</summary>
     public const char Spaces = ' ';
 
+    /// <summary>The most cells that a line of a table has.</summary>
+    public const int MostCells = 4096;
+
     /// <summary>Whole lines in cells, one entry a line.</summary>
+    /// <exception cref="TooWideException">A line has more cells than any table.</exception>
     public static List<string[]> Split(ReadOnlyMemory<byte> lines, char delimiter)
     {
         var rows = new List<string[]>();
         if (delimiter == Spaces)
         {
             foreach (Range line in lines.Span.Split((byte)'\n'))
-                rows.Add(System.Text.Encoding.UTF8.GetString(lines.Span[line]).Split([' ', '\t', '\r'], StringSplitOptions.RemoveEmptyEntries));
+                rows.Add(Cells(lines.Span[line], delimiter, rows.Count));
             return rows;
         }
         // A quote that opens a value of the preamble must not swallow the lines that follow.
-        using CsvReader reader = CsvReader.Create(lines, new CsvReaderOptions { Separator = delimiter, HasHeader = false, SkipEmptyLines = false, AllowLineBreaksInQuotes = false });
+        using CsvReader reader = CsvReader.Create(lines, new CsvReaderOptions { Separator = delimiter, HasHeader = false, SkipEmptyLines = false, AllowLineBreaksInQuotes = false, DetectSeparatorHint = false });
         while (reader.Read())
         {
+            if (reader.FieldCount > MostCells)
+                throw new TooWideException(rows.Count);
             string[] cells = new string[reader.FieldCount];
             for (int i = 0; i < cells.Length; i++)
                 cells[i] = reader.GetString(i).Trim();
@@ -30,12 +37,37 @@ internal static class RowSplitter
         return rows;
     }
 
+    /// <summary>One line in cells, without quotes and spaces round them.</summary>
+    /// <exception cref="TooWideException">The line has more cells than any table.</exception>
+    public static string[] Cells(ReadOnlySpan<byte> line, char delimiter, int index = 0)
+    {
+        var cells = new List<string>();
+        int position = 0;
+        while (Next(line, delimiter, ref position, out ReadOnlySpan<byte> cell))
+        {
+            if (cells.Count == MostCells)
+                throw new TooWideException(index);
+            cells.Add(Encoding.UTF8.GetString(Cell.Trim(cell)));
+        }
+        return cells is [""] ? [] : [.. cells];
+    }
+
+    /// <summary>One cell of a line, without quotes and spaces round it.</summary>
+    public static ReadOnlySpan<byte> CellAt(ReadOnlySpan<byte> line, char delimiter, int index)
+    {
+        int position = 0;
+        for (int i = 0; Next(line, delimiter, ref position, out ReadOnlySpan<byte> cell); i++)
+            if (i == index)
+                return Cell.Trim(cell);
+        return default;
+    }
+
     /// <summary>Finds the next cell of a line; false where there is none left.</summary>
     /// <param name="line">UTF-8 without its line end.</param>
     /// <param name="delimiter">The character between cells.</param>
     /// <param name="position">Where to look from: 0 for the first cell; set behind the cell and its delimiter.</param>
     /// <param name="cell">The cell, quotes and spaces and all.</param>
-    public static bool Next(ReadOnlySpan<byte> line, char delimiter, ref int position, out ReadOnlySpan<byte> cell)
+    public static bool Next(ReadOnlySpan<byte> line, char delimiter, scoped ref int position, out ReadOnlySpan<byte> cell)
     {
         cell = default;
         if (position > line.Length)

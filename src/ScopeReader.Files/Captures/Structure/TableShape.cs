@@ -18,6 +18,15 @@ internal sealed record TableShape
     /// <summary>Indices of the columns that hold numbers, rising.</summary>
     public required int[] Columns { get; init; }
 
-    /// <summary>How many columns hold numbers, their first rows.</summary>
+    /// <summary>For each of them the index of a column that holds its unit in every row, or -1.</summary>
+    public required int[] UnitColumns { get; init; }
+
+    /// <summary>For each of them the base unit that its cells have written in them, or null.</summary>
+    public required string?[] CellUnits { get; init; }
+
+    /// <summary>How many rows of the block are among the lines looked at.</summary>
     public required int Sampled { get; init; }
+
+    /// <summary>How many cells its rows have.</summary>
+    public int Width => Rows[First].Length;
 }

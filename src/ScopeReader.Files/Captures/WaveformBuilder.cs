@@ -1,0 +1,61 @@
+using ScopeReader.Captures;
+using ScopeReader.Files.Axes;
+using ScopeReader.Files.Rows;
+
+namespace ScopeReader.Files;
+
+/// <summary>Makes waveforms of a column of samples and the stretches of its times.</summary>
+internal static class WaveformBuilder
+{
+    /// <summary>Adds a waveform for each stretch.</summary>
+    public static void Add(CaptureBuilder capture, Table table, SampleSource source, List<TimedPiece> pieces)
+    {
+        ReadOnlySpan<double> values = table.Columns[source.Index].Values;
+        int added = 0;
+        foreach (TimedPiece piece in pieces)
+            if (AddPiece(capture, source, values.Slice(piece.First, piece.Length), piece))
+                added++;
+        if (added == 0)
+            throw new ImportException(capture.File, $"expected numbers in {source.Name}, found none. Leave the column out with \"skip\" in columns under [import].", table.FirstLine, table.Shape.Columns[source.Index] + 1);
+    }
+
+    private static bool AddPiece(CaptureBuilder capture, SampleSource source, ReadOnlySpan<double> values, TimedPiece piece)
+    {
+        // A channel may be recorded over fewer rows than its neighbours.
+        values = values[..(values.LastIndexOfAnyExcept(double.NaN) + 1)];
+        int missing = values.Count(double.NaN);
+        (int start, int length) = missing == 0 ? (0, values.Length) : LongestWhole(values);
+        if (length == 0)
+            return false;
+        int segment = capture.NextSegment(source.Name);
+        if (missing > 0)
+            capture.Doubts.Add(FormattableString.Invariant($"{source.Name}: {missing} of {values.Length} samples are missing or over range, the first is sample {values.IndexOf(double.NaN) + 1}; measured is the longest stretch without them, samples {start + 1} to {start + length}"));
+        double[] samples = values.Slice(start, length).ToArray();
+        capture.Scale(samples, source.Unit, source.Factor);
+        int before = start;
+        if (piece.Falls)
+        {
+            Array.Reverse(samples);
+            before = piece.Length - start - length;
+        }
+        TimeAxis axis = piece.Axis;
+        if (axis.IsTimed && before > 0)
+            axis = new TimeAxis(axis.Start + before * axis.Interval, axis.Interval, axis.Source, axis.IntervalLow, axis.IntervalHigh);
+        capture.Add(new Waveform(source.Name, source.Unit, axis, samples, segment), missing);
+        return true;
+    }
+
+    private static (int Start, int Length) LongestWhole(ReadOnlySpan<double> values)
+    {
+        int bestStart = 0, best = 0, start = 0;
+        for (int i = 0; i <= values.Length; i++)
+        {
+            if (i < values.Length && !double.IsNaN(values[i]))
+                continue;
+            if (i - start > best)
+                (bestStart, best) = (start, i - start);
+            start = i + 1;
+        }
+        return (bestStart, best);
+    }
+}
