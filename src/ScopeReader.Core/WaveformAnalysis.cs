@@ -1,5 +1,6 @@
 using ScopeReader.Edges;
 using ScopeReader.Frequency;
+using ScopeReader.Harmonics;
 using ScopeReader.Levels;
 using ScopeReader.Ringing;
 
@@ -28,5 +29,7 @@ public static class WaveformAnalysis
 
         IReadOnlyList<MeasuredEdge> edges = EdgeAnalyser.Measure(job, states, shape.Step, transitions, frequency?.Grid);
         RingingAnalyser.Measure(job, edges);
+        job.Cancellation.ThrowIfCancellationRequested();
+        HarmonicAnalyser.Measure(job, frequency?.Primary);
     }
 }

@@ -86,7 +86,7 @@ public sealed class HarmonicFit
             sums[i] = Dirichlet.Of(i * at.Frequency, samples.Length);
         for (int i = 1; i <= k; i++)
         {
-            ToneSums tone = ToneSums.Of(samples, i * at.Frequency);
+            ToneSums tone = ToneSums.Of(samples, i * at.Frequency, timed: !frequencyKnown);
             // The mean is taken off here: an offset far above the amplitude would cost digits.
             right[i] = tone.Cosine - mean * sums[i].Cosine;
             right[k + i] = tone.Sine;

@@ -19,7 +19,8 @@ public readonly record struct ToneSums(double Cosine, double Sine, double TimeCo
     /// <summary>The sums over a record.</summary>
     /// <param name="samples">Shape [n].</param>
     /// <param name="frequency">Cycles per sample.</param>
-    public static ToneSums Of(ReadOnlySpan<double> samples, double frequency)
+    /// <param name="timed">False to leave the sums with t at zero, in half the time.</param>
+    public static ToneSums Of(ReadOnlySpan<double> samples, double frequency, bool timed = true)
     {
         var cosine = new double[Block];
         var sine = new double[Block];
@@ -35,12 +36,12 @@ public readonly record struct ToneSums(double Cosine, double Sine, double TimeCo
         for (int start = 0; start < samples.Length; start += Block)
         {
             ReadOnlySpan<double> block = samples.Slice(start, Math.Min(Block, samples.Length - start));
-            double c = Dot(block, cosine), s = Dot(block, sine), tc = Dot(block, timeCosine), ts = Dot(block, timeSine);
+            double c = Dot(block, cosine), s = Dot(block, sine), tc = timed ? Dot(block, timeCosine) : 0, ts = timed ? Dot(block, timeSine) : 0;
             double t = start - middle;
             (double c0, double s0) = Turn.Of(frequency, t);
             double blockCosine = c0 * c - s0 * s, blockSine = s0 * c + c0 * s;
-            total = new ToneSums(total.Cosine + blockCosine, total.Sine + blockSine,
-                total.TimeCosine + t * blockCosine + c0 * tc - s0 * ts, total.TimeSine + t * blockSine + s0 * tc + c0 * ts);
+            total = new ToneSums(total.Cosine + blockCosine, total.Sine + blockSine, !timed ? 0 :
+                total.TimeCosine + t * blockCosine + c0 * tc - s0 * ts, !timed ? 0 : total.TimeSine + t * blockSine + s0 * tc + c0 * ts);
         }
         return total;
     }
