@@ -1,6 +1,8 @@
+using ScopeReader.Commands;
+
 namespace ScopeReader;
 
 internal static class Program
 {
-    private static int Main() => 0;
+    private static Task<int> Main(string[] arguments) => CommandLine.Run(arguments, Surroundings.OfProcess(), (_, _, _, _) => ExitStatus.Fault);
 }

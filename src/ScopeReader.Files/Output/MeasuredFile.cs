@@ -9,10 +9,6 @@ public sealed record MeasuredFile(string File, Measurement? Measurement, string?
     /// <summary>How the file came out: <see cref="Outcome.Error"/> where it could not be read.</summary>
     public Outcome Outcome => Measurement?.Outcome ?? Outcome.Error;
 
-    /// <summary>The outcome of several files: error, fail, undecided, pass, unjudged, whichever of these comes first in one of them.</summary>
-    public static Outcome Worst(IEnumerable<MeasuredFile> files)
-    {
-        ArgumentNullException.ThrowIfNull(files);
-        return files.Select(f => f.Outcome).DefaultIfEmpty(Outcome.Unjudged).Max();
-    }
+    /// <summary>The outcome of two files together: error, fail, undecided, pass, unjudged, whichever of these comes first in one of them.</summary>
+    public static Outcome Worst(Outcome one, Outcome other) => one > other ? one : other;
 }

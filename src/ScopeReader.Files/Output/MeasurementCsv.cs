@@ -10,7 +10,7 @@ namespace ScopeReader.Files.Output;
 /// Made to be opened in a spreadsheet as it is: a text that a spreadsheet would take for a formula gets an apostrophe
 /// before it. Numbers are written to their last bit, with a decimal point.
 /// </remarks>
-public sealed class MeasurementCsv : IDisposable
+public static class MeasurementCsv
 {
     private static readonly CsvWriterOptions Options = new()
     {
@@ -23,44 +23,41 @@ public sealed class MeasurementCsv : IDisposable
         FalseValue = "false",
     };
 
-    private readonly CsvWriter _writer;
-
-    /// <summary>Starts with the header row.</summary>
-    /// <param name="output">Where the rows go; stays open.</param>
-    public MeasurementCsv(TextWriter output)
+    /// <summary>Writes the header row.</summary>
+    /// <param name="output">Where the row goes.</param>
+    public static void WriteHeader(TextWriter output)
     {
-        _writer = CsvWriter.Create(output, Options, leaveOpen: true);
-        _writer.WriteHeader("file", "channel", "segment", "quantity", "value", "unit", "standardUncertainty", "expandedUncertainty", "coverage", "method", "primary", "outcome");
+        using var writer = CsvWriter.Create(output, Options, leaveOpen: true);
+        writer.WriteHeader("file", "channel", "segment", "quantity", "value", "unit", "standardUncertainty", "expandedUncertainty", "coverage", "method", "primary", "outcome");
     }
 
     /// <summary>Writes one file's readings; a file that could not be read has none.</summary>
-    public void Write(MeasuredFile file)
+    /// <param name="output">Where the rows go.</param>
+    /// <param name="file">The file.</param>
+    public static void Write(TextWriter output, MeasuredFile file)
     {
         ArgumentNullException.ThrowIfNull(file);
+        using var writer = CsvWriter.Create(output, Options, leaveOpen: true);
         foreach (ChannelMeasurement channel in file.Measurement?.Channels ?? [])
             foreach (Reading reading in channel.Readings)
-                Write(file.File, channel, reading);
-        _writer.Flush();
+                Write(writer, file.File, channel, reading);
     }
 
-    /// <inheritdoc/>
-    public void Dispose() => _writer.Dispose();
-
-    private void Write(string file, ChannelMeasurement channel, Reading reading)
+    private static void Write(CsvWriter writer, string file, ChannelMeasurement channel, Reading reading)
     {
-        _writer.WriteField(file);
-        _writer.WriteField(channel.Channel.Name);
-        _writer.WriteField(channel.Channel.Segment, default);
-        _writer.WriteField(reading.Quantity.Id);
-        _writer.WriteField(reading.Value, "R");
-        _writer.WriteField(reading.Unit);
-        _writer.WriteField(reading.Budget.StandardUncertainty, "R");
-        _writer.WriteField(reading.Budget.ExpandedUncertainty, "R");
-        _writer.WriteField(Budget.Coverage, "R");
-        _writer.WriteField(reading.Method);
-        _writer.WriteField(reading.IsPrimary);
-        _writer.WriteField(Outcome(channel, reading));
-        _writer.EndRecord();
+        writer.WriteField(file);
+        writer.WriteField(channel.Channel.Name);
+        writer.WriteField(channel.Channel.Segment, default);
+        writer.WriteField(reading.Quantity.Id);
+        writer.WriteField(reading.Value, "R");
+        writer.WriteField(reading.Unit);
+        writer.WriteField(reading.Budget.StandardUncertainty, "R");
+        writer.WriteField(reading.Budget.ExpandedUncertainty, "R");
+        writer.WriteField(Budget.Coverage, "R");
+        writer.WriteField(reading.Method);
+        writer.WriteField(reading.IsPrimary);
+        writer.WriteField(Outcome(channel, reading));
+        writer.EndRecord();
     }
 
     // Several limits may judge one reading: the answer that needs attention first.

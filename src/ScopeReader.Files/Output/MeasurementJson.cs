@@ -7,7 +7,10 @@ using ScopeReader.Readings;
 namespace ScopeReader.Files.Output;
 
 /// <summary>Measurements as JSON for programs, version 1.</summary>
-public static class MeasurementJson
+/// <remarks>Keeps what it writes and not the samples, so that many captures fit.</remarks>
+/// <param name="program">The program and its version.</param>
+/// <param name="explain">Whether each reading comes with its budget.</param>
+public sealed class MeasurementJson(string program, bool explain)
 {
     // Relaxed: ± and µ stay readable. Control characters are escaped all the same, and this JSON never stands inside a page.
     private static readonly MeasurementContext Indented = new(new JsonSerializerOptions(MeasurementContext.Default.Options)
@@ -18,17 +21,20 @@ public static class MeasurementJson
 
     private static readonly MeasurementContext OneLine = new(new JsonSerializerOptions(MeasurementContext.Default.Options) { Encoder = JavaScriptEncoder.UnsafeRelaxedJsonEscaping });
 
-    /// <summary>The whole document.</summary>
-    /// <param name="program">The program and its version.</param>
-    /// <param name="files">The files in their order.</param>
-    /// <param name="explain">Whether each reading comes with its budget.</param>
-    public static string Document(string program, IReadOnlyList<MeasuredFile> files, bool explain)
+    private readonly List<CaptureObject> _captures = [];
+    private Outcome _worst;
+
+    /// <summary>Adds a file to the document.</summary>
+    public void Add(MeasuredFile file)
     {
-        ArgumentNullException.ThrowIfNull(program);
-        ArgumentNullException.ThrowIfNull(files);
-        var document = new MeasurementDocument("scopereader-measurement", 1, program, OutputWords.Of(MeasuredFile.Worst(files)), [.. files.Select(f => Capture(f, explain))]);
-        return JsonSerializer.Serialize(document, Indented.MeasurementDocument);
+        ArgumentNullException.ThrowIfNull(file);
+        _captures.Add(Capture(file, explain));
+        _worst = MeasuredFile.Worst(_worst, file.Outcome);
     }
+
+    /// <summary>The document of the files so far, in the order in which they were added.</summary>
+    public string Document() => JsonSerializer.Serialize(
+        new MeasurementDocument("scopereader-measurement", 1, program, OutputWords.Of(_worst), _captures), Indented.MeasurementDocument);
 
     /// <summary>One file's capture object, on one line.</summary>
     /// <param name="file">The file.</param>

@@ -18,6 +18,14 @@ public class MeasurementJsonTests
         return Made.File("if.csv", Made.Channel(Made.Waveform(), [frequency, Made.Level()], Judge.Reading(Tight, frequency)));
     }
 
+    private static string Document(MeasuredFile[] files, bool explain)
+    {
+        var json = new MeasurementJson(Program, explain);
+        foreach (MeasuredFile file in files)
+            json.Add(file);
+        return json.Document();
+    }
+
     private static JsonElement Parse(string json) => JsonDocument.Parse(json).RootElement;
 
     private static string[] Names(JsonElement element) => [.. element.EnumerateObject().Select(p => p.Name)];
@@ -26,7 +34,7 @@ public class MeasurementJsonTests
     [Fact]
     public void The_names_and_their_order_are_the_contract()
     {
-        JsonElement root = Parse(MeasurementJson.Document(Program, [Sample()], explain: true));
+        JsonElement root = Parse(Document([Sample()], explain: true));
         Assert.Equal(["format", "version", "program", "outcome", "captures"], Names(root));
         JsonElement capture = root.GetProperty("captures")[0], channel = capture.GetProperty("channels")[0], reading = channel.GetProperty("readings")[0];
         Assert.Equal(["file", "sha256", "error", "cautions", "doubts", "channels"], Names(capture));
@@ -42,7 +50,7 @@ public class MeasurementJsonTests
     [Fact]
     public void The_values_are_in_base_units_and_the_unknown_is_null()
     {
-        JsonElement root = Parse(MeasurementJson.Document(Program, [Sample()], explain: true));
+        JsonElement root = Parse(Document([Sample()], explain: true));
         Assert.Equal(("scopereader-measurement", 1, Program, "pass"),
             (root.GetProperty("format").GetString(), root.GetProperty("version").GetInt32(), root.GetProperty("program").GetString(), root.GetProperty("outcome").GetString()));
         JsonElement capture = root.GetProperty("captures")[0], channel = capture.GetProperty("channels")[0], reading = channel.GetProperty("readings")[0];
@@ -66,12 +74,12 @@ public class MeasurementJsonTests
 
     [Fact]
     public void Budgets_are_there_only_where_they_were_asked_for() =>
-        Assert.False(Parse(MeasurementJson.Document(Program, [Sample()], explain: false)).GetProperty("captures")[0].GetProperty("channels")[0].GetProperty("readings")[0].TryGetProperty("budget", out _));
+        Assert.False(Parse(Document([Sample()], explain: false)).GetProperty("captures")[0].GetProperty("channels")[0].GetProperty("readings")[0].TryGetProperty("budget", out _));
 
     [Fact]
     public void A_file_that_could_not_be_read_is_there_with_its_error_and_makes_the_whole_an_error()
     {
-        JsonElement root = Parse(MeasurementJson.Document(Program, [Sample(), new MeasuredFile("gone.csv", null, "gone.csv: there is no such file")], explain: false));
+        JsonElement root = Parse(Document([Sample(), new MeasuredFile("gone.csv", null, "gone.csv: there is no such file")], explain: false));
         Assert.Equal("error", root.GetProperty("outcome").GetString());
         JsonElement gone = root.GetProperty("captures")[1];
         Assert.Equal(["file", "sha256", "error", "cautions", "doubts", "channels"], Names(gone));
@@ -102,7 +110,7 @@ public class MeasurementJsonTests
     {
         // Squares of 1e200 overflow: the uncertainty is infinite, the factor is not a number.
         var wild = new Reading(Quantities.Frequency, 1, "Hz", new Budget([BudgetTerm.Normal("noise", 1e200)]), "crossings");
-        string json = MeasurementJson.Document(Program, [Made.File("a.csv", Made.Channel(Made.Waveform(), [wild]))], explain: true);
+        string json = Document([Made.File("a.csv", Made.Channel(Made.Waveform(), [wild]))], explain: true);
         Assert.Equal(JsonValueKind.Null, Parse(json).GetProperty("captures")[0].GetProperty("channels")[0].GetProperty("readings")[0].GetProperty("standardUncertainty").ValueKind);
         Assert.DoesNotContain("NaN", json, StringComparison.Ordinal);
         Assert.DoesNotContain("Infinity", json, StringComparison.Ordinal);
@@ -111,9 +119,9 @@ public class MeasurementJsonTests
     [Fact]
     public void The_same_measurement_gives_the_same_text_and_a_line_is_one_line()
     {
-        Assert.Equal(MeasurementJson.Document(Program, [Sample()], explain: true), MeasurementJson.Document(Program, [Sample()], explain: true));
+        Assert.Equal(Document([Sample()], explain: true), Document([Sample()], explain: true));
         Assert.DoesNotContain('\n', MeasurementJson.Line(Sample(), explain: true));
-        Assert.DoesNotContain('\r', MeasurementJson.Document(Program, [Sample()], explain: true));
+        Assert.DoesNotContain('\r', Document([Sample()], explain: true));
     }
 
     [Fact]

@@ -1,0 +1,68 @@
+using System.Globalization;
+using System.Runtime.CompilerServices;
+using ScopeReader.Captures;
+using ScopeReader.Files;
+using ScopeReader.Files.Output;
+
+namespace ScopeReader.Commands;
+
+/// <summary>The one place that turns a file and a plan into a measurement; every verb measures through it.</summary>
+internal static class CaptureMeasurer
+{
+    /// <summary>Reads and measures a file.</summary>
+    /// <param name="file">The file as the person named it.</param>
+    /// <param name="plan">The plan, with what the command line says in it.</param>
+    /// <param name="channel">Measure only this channel; null for all.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <returns>The measurement, or why the file could not be read.</returns>
+    public static MeasuredFile Measure(string file, Plan plan, string? channel, CancellationToken cancellation)
+    {
+        try
+        {
+            return new MeasuredFile(file, Analysis.Measure(Read(file, plan, channel, cancellation), plan, null, cancellation), null);
+        }
+        catch (ImportException e)
+        {
+            return new MeasuredFile(file, null, e.Message);
+        }
+    }
+
+    /// <summary>Measures several files, at most so many at a time.</summary>
+    /// <param name="files">The files.</param>
+    /// <param name="measure">Measures one.</param>
+    /// <param name="jobs">How many at a time, 1 or more.</param>
+    /// <param name="inOrder">True for the files' order, false for that in which they finish.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    public static async IAsyncEnumerable<MeasuredFile> MeasureAll(IReadOnlyList<string> files, Func<string, MeasuredFile> measure, int jobs, bool inOrder,
+        [EnumeratorCancellation] CancellationToken cancellation)
+    {
+        // No more than the jobs are ever held: a capture may be as large as the memory allows.
+        var running = new List<Task<MeasuredFile>>();
+        for (int next = 0; next < files.Count || running.Count > 0;)
+        {
+            while (running.Count < jobs && next < files.Count)
+            {
+                string file = files[next++];
+                running.Add(Task.Run(() => measure(file), cancellation));
+            }
+            Task<MeasuredFile> done = inOrder ? running[0] : await Task.WhenAny(running);
+            running.Remove(done);
+            yield return await done;
+        }
+    }
+
+    private static Capture Read(string file, Plan plan, string? channel, CancellationToken cancellation)
+    {
+        Capture capture = CaptureReader.Read(file, plan.Import, plan.Chain.Scale, cancellation).Capture;
+        if (channel is not null)
+        {
+            Channel[] chosen = [.. capture.Channels.Where(c => c.Name == channel)];
+            if (chosen.Length == 0)
+                throw new ImportException(file, $"expected a channel \"{channel}\", found {string.Join(", ", capture.Channels.Select(c => c.Name))}. Name one of these with --channel.");
+            capture = capture with { Channels = chosen };
+        }
+        return plan is { Chain.CalibrationDue: { } due, AsOf: { } today } && due < today
+            ? capture with { Doubts = [.. capture.Doubts, string.Create(CultureInfo.InvariantCulture, $"the instrument's calibration ran out on {due:yyyy-MM-dd}, by the plan")] }
+            : capture;
+    }
+}

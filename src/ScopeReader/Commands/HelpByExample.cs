@@ -1,0 +1,80 @@
+using System.CommandLine;
+using System.CommandLine.Invocation;
+using ScopeReader.Commands.Tables;
+
+namespace ScopeReader.Commands;
+
+/// <summary>The help: commands to start from, and what there is.</summary>
+internal sealed class HelpByExample(Surroundings surroundings) : SynchronousCommandLineAction
+{
+    private const string Source = "captures-demo/if-source-7.csv", Plan = "captures-demo/if-source.toml", Export = "captures-demo/logger-export.csv";
+
+    /// <summary>The examples of each verb; of the empty name, those of the program.</summary>
+    public static IReadOnlyDictionary<string, string[]> Examples { get; } = new Dictionary<string, string[]>(StringComparer.Ordinal)
+    {
+        [""] = [$"scopereader measure {Source} --plan {Plan}", $"scopereader inspect {Export}", "scopereader explain rise-time", $"scopereader {Source} --plan {Plan}"],
+        ["measure"] =
+        [
+            $"scopereader measure {Source} --plan {Plan}",
+            $"scopereader measure {Source} --nominal 455kHz --explain",
+            "scopereader measure captures-demo/*.csv --jobs 2 --csv > readings.csv",
+            "scopereader measure captures-demo/no-interval.csv --interval 20ns --json",
+        ],
+        ["inspect"] = [$"scopereader inspect {Export}", "scopereader inspect captures-demo/*.csv --json"],
+        ["explain"] = ["scopereader explain frequency-error", "scopereader explain plan", "scopereader explain"],
+    };
+
+    public override bool ClearsParseErrors => true;
+
+    public override int Invoke(ParseResult parseResult)
+    {
+        Command command = parseResult.CommandResult.Command;
+        bool isRoot = command is RootCommand;
+        var sheet = new Sheet(surroundings.Width(), colour: false);
+        sheet.Line(Capitalised(command.Description!));
+
+        sheet.Heading("Usage");
+        if (isRoot)
+            sheet.Indented("scopereader VERB FILE… [options]");
+        sheet.Indented(string.Join(' ', ((string[])["scopereader", isRoot ? "" : command.Name, .. command.Arguments.Select(Named), "[options]"]).Where(w => w.Length > 0)));
+
+        sheet.Heading("Examples");
+        foreach (string example in Examples[isRoot ? "" : command.Name])
+            sheet.AsItIs("  " + example);
+
+        Rows(sheet, "Verbs", [.. command.Subcommands.Select(c => (c.Name, c.Description!))]);
+        Rows(sheet, "Arguments", [.. command.Arguments.Select(a => (a.Name, a.Description!))]);
+        Rows(sheet, "Options", [.. command.Options.Concat(isRoot ? [] : parseResult.RootCommandResult.Command.Options.Where(o => o.Recursive)).Select(o => (Form(o), o.Description!))]);
+        if (command.Name == "measure")
+            Rows(sheet, "Exit status",
+            [
+                ("0", "every limit passed, or none was set"),
+                ("1", "a limit failed"),
+                ("2", "none failed, one is undecided"),
+                ("3", "a file could not be read, or a limited quantity not measured"),
+                ("64", "the command line or the plan is wrong"),
+                ("70", "a fault of this program"),
+                ("130", "interrupted"),
+            ]);
+        surroundings.Output.Write(sheet.ToString());
+        return ExitStatus.Passed;
+    }
+
+    private static void Rows(Sheet sheet, string heading, IReadOnlyList<(string Name, string Meaning)> rows)
+    {
+        if (rows.Count == 0)
+            return;
+        sheet.Heading(heading);
+        sheet.Columns([.. rows.Select(r => new[] { "  " + r.Name, r.Meaning })]);
+    }
+
+    private static string Form(Option option) => string.Join(' ', ((string?[])[string.Join(", ", option.Aliases.Where(a => a.Length == 2).Prepend(option.Name)), option.HelpName]).OfType<string>());
+
+    private static string Named(Argument argument)
+    {
+        string name = argument.Arity.MaximumNumberOfValues > 1 ? argument.Name + "…" : argument.Name;
+        return argument.Arity.MinimumNumberOfValues == 0 ? $"[{name}]" : name;
+    }
+
+    private static string Capitalised(string text) => char.ToUpperInvariant(text[0]) + text[1..] + (text.EndsWith('.') ? "" : ".");
+}

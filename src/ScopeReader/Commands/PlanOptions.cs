@@ -1,0 +1,56 @@
+using System.CommandLine;
+using ScopeReader.Files.Plans;
+using ScopeReader.Readings;
+
+namespace ScopeReader.Commands;
+
+/// <summary>The options that say how captures are read and judged, and the plan that they make.</summary>
+internal sealed class PlanOptions
+{
+    private readonly Option<string?> _plan = Value("--plan", "FILE", "the plan: nominal, measuring chain, limits (TOML)");
+    private readonly Option<string?> _nominal = Value("--nominal", "FREQUENCY", "nominal frequency, such as 455kHz; before the plan's");
+    private readonly Option<string?> _interval = Value("--interval", "TIME", "sample interval, such as 2ns, where the file states none");
+    private readonly Option<string?> _rate = Value("--rate", "FREQUENCY", "samples a second, such as 500MHz, in place of --interval");
+
+    public Option<string?> Plan => _plan;
+
+    public void AddTo(Command command)
+    {
+        command.Options.Add(_plan);
+        command.Options.Add(_nominal);
+        command.Options.Add(_interval);
+        command.Options.Add(_rate);
+    }
+
+    /// <summary>The plan, with what the command line says in it.</summary>
+    /// <exception cref="UsageException">An option's value is wrong.</exception>
+    /// <exception cref="PlanException">The plan is wrong or missing.</exception>
+    public Plan Read(ParseResult parsed, DateOnly today)
+    {
+        double? nominal = Positive(parsed, _nominal, "Hz"), interval = Positive(parsed, _interval, "s"), rate = Positive(parsed, _rate, "Hz");
+        if (interval is not null && rate is not null)
+            throw new UsageException("--interval and --rate say the same thing; keep one of them");
+        Plan plan = parsed.GetValue(_plan) is { } file ? PlanReader.ReadFile(file) : ScopeReader.Plan.Empty;
+        return plan with
+        {
+            Nominal = nominal ?? plan.Nominal,
+            Import = plan.Import with { Interval = interval ?? 1 / rate ?? plan.Import.Interval },
+            AsOf = today,
+        };
+    }
+
+    /// <summary>An option that takes a value.</summary>
+    public static Option<string?> Value(string name, string value, string description) => new(name) { HelpName = value, Description = description, Arity = ArgumentArity.ExactlyOne };
+
+    /// <summary>An option that is there or not.</summary>
+    public static Option<bool> Flag(string name, string description, params string[] aliases) => new(name, aliases) { Description = description, Arity = ArgumentArity.Zero };
+
+    private static double? Positive(ParseResult parsed, Option<string?> option, string unit)
+    {
+        if (parsed.GetValue(option) is not { } text)
+            return null;
+        if (!Units.TryParse(text, unit, out double value, out string problem))
+            throw new UsageException($"{option.Name}: {problem}");
+        return value > 0 ? value : throw new UsageException($"{option.Name}: expected more than zero, found \"{text}\"");
+    }
+}

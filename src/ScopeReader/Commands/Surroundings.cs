@@ -1,0 +1,42 @@
+using System.Text;
+
+namespace ScopeReader.Commands;
+
+/// <summary>Where a command runs: what it writes to, how wide and colourful that is, and which day it is.</summary>
+/// <param name="Output">Results go here.</param>
+/// <param name="Error">Everything else goes here.</param>
+/// <param name="Width">Tells the columns of a line of output.</param>
+/// <param name="Colour">Whether the output shows colours.</param>
+/// <param name="Today">The day that ageing is counted to.</param>
+internal sealed record Surroundings(TextWriter Output, TextWriter Error, Func<int> Width, bool Colour, DateOnly Today)
+{
+    private const int UsualWidth = 80;
+
+    /// <summary>The process's own.</summary>
+    /// <remarks>
+    /// Its own writers, and the width only when asked: the console's send the terminal a mode change as they are made,
+    /// and follow a system's code page where files for programs are UTF-8.
+    /// </remarks>
+    public static Surroundings OfProcess()
+    {
+        bool redirected = Console.IsOutputRedirected;
+        bool wanted = Environment.GetEnvironmentVariable("NO_COLOR") is null or "" && Environment.GetEnvironmentVariable("TERM") is not "dumb";
+        return new Surroundings(Writer(Console.OpenStandardOutput()), Writer(Console.OpenStandardError()), () => redirected ? UsualWidth : WindowWidth(),
+            !redirected && wanted, DateOnly.FromDateTime(DateTime.Now));
+    }
+
+    private static StreamWriter Writer(Stream stream) => new(stream, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false)) { AutoFlush = true, NewLine = "\n" };
+
+    private static int WindowWidth()
+    {
+        try
+        {
+            return Console.WindowWidth is > 0 and int width ? width : UsualWidth;
+        }
+        catch (IOException)
+        {
+            // A terminal that does not tell its size.
+            return UsualWidth;
+        }
+    }
+}

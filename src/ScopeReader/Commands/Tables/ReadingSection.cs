@@ -1,0 +1,60 @@
+using ScopeReader.Limits;
+using ScopeReader.Readings;
+
+namespace ScopeReader.Commands.Tables;
+
+/// <summary>A channel's readings as columns, or one above the other where the columns would not fit.</summary>
+internal static class ReadingSection
+{
+    private const int Gap = 2, LeastForNotes = 22;
+
+    public static void Write(Sheet sheet, IReadOnlyList<Reading> readings)
+    {
+        if (readings.Count == 0)
+            return;
+        sheet.Heading("Readings");
+        Reading[] harmonics = [.. readings.Where(r => Phrases.HarmonicNumber(r.Quantity) > 0)];
+        bool compact = harmonics.Length > 2;
+        Rows(sheet, compact ? [.. readings.Except(harmonics)] : readings);
+        if (compact)
+            Harmonics(sheet, harmonics);
+        WriteMissing(sheet, readings);
+    }
+
+    private static void Rows(Sheet sheet, IReadOnlyList<Reading> readings)
+    {
+        string[][] rows = [.. readings.Select(r => new[] { r.Quantity.Id, Phrases.Of(r), Phrases.How(r) })];
+        if (rows.Length == 0)
+            return;
+        if (rows.Max(r => r[0].Length) + rows.Max(r => r[1].Length) + 2 * Gap + LeastForNotes <= sheet.Width)
+        {
+            sheet.Columns(rows);
+            return;
+        }
+        foreach (string[] row in rows)
+        {
+            sheet.Line(row[0]);
+            sheet.Indented(row[1]);
+            sheet.Indented(row[2], 4);
+        }
+    }
+
+    // Ten harmonics would be ten rows that differ in a number: they share the lines.
+    private static void Harmonics(Sheet sheet, Reading[] harmonics)
+    {
+        string[] how = [.. harmonics.Select(Phrases.How).Distinct()];
+        sheet.Line(how.Length == 1 ? $"harmonics, dBc ({how[0]})" : "harmonics, dBc");
+        string[] items = [.. harmonics.Select(h => $"{Phrases.HarmonicNumber(h.Quantity)}: {Phrases.Of(h).Replace(Sheet.Joined(" dBc"), "", StringComparison.Ordinal)}{(how.Length == 1 ? "" : $" ({Phrases.How(h)})")}")];
+        int width = items.Max(i => i.Length) + Gap, each = Math.Max(1, (sheet.Width - Gap) / width);
+        foreach (string[] line in items.Chunk(each))
+            sheet.Indented(string.Concat(line.Select(i => i.PadRight(width))).TrimEnd());
+    }
+
+    private static void WriteMissing(Sheet sheet, IReadOnlyList<Reading> readings)
+    {
+        string[] missing = [.. readings.SelectMany(r => r.Budget.Missing).Distinct()];
+        if (missing.Length > 0)
+            sheet.Line($"without {string.Join(", ", missing)}: the plan does not state {(missing.Length == 1 ? "it" : "them")}, so these readings are as indicated and their ± leaves "
+                + $"{(missing.Length == 1 ? "it" : "them")} out. Add {string.Join(", ", missing.Select(PlanKeys.For))} to [chain].");
+    }
+}
