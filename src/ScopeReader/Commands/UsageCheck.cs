@@ -12,6 +12,8 @@ internal static class UsageCheck
     {
         if (StrayOption(parsed) is { } option)
             throw new UsageException($"unknown option \"{option}\"; the nearest is {NearestWord.Of(option, Options(parsed))}");
+        if (OptionWithoutValue(parsed) is { } hungry)
+            throw new UsageException(NeedsValue(hungry));
         if (parsed.UnmatchedTokens is [var word, ..])
             throw new UsageException($"unexpected \"{word}\" after {parsed.CommandResult.Command.Name}");
         if (parsed.Errors is [var error, ..])
@@ -32,6 +34,15 @@ internal static class UsageCheck
         return null;
     }
 
+    // The parser takes the next option for the value that is not there: --plan --json.
+    private static Option? OptionWithoutValue(ParseResult parsed)
+    {
+        string[] names = [.. Options(parsed)];
+        return parsed.CommandResult.Children.OfType<OptionResult>().FirstOrDefault(o => o.Tokens.Any(t => names.Contains(t.Value)))?.Option;
+    }
+
+    private static string NeedsValue(Option option) => $"{option.Name} needs a value: {option.Name} {option.HelpName}";
+
     private static IEnumerable<string> Options(ParseResult parsed)
     {
         IEnumerable<Option> here = parsed.CommandResult.Command.Options;
@@ -42,7 +53,7 @@ internal static class UsageCheck
 
     private static string Words(ParseError error, Command command) => error.SymbolResult switch
     {
-        OptionResult { Tokens.Count: 0 } option => $"{option.Option.Name} needs a value: {option.Option.Name} {option.Option.HelpName}",
+        OptionResult { Tokens.Count: 0 } option => NeedsValue(option.Option),
         OptionResult { Option: Option<bool> } flag => $"{flag.Option.Name} takes no value",
         OptionResult option => $"{option.Option.Name} is given more than once",
         ArgumentResult argument => $"{command.Name} needs {Article(argument.Argument.Name)}: scopereader {command.Name} {argument.Argument.Name}",

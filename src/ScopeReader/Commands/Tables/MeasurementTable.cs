@@ -65,8 +65,14 @@ internal static class MeasurementTable
 
     private static string Subject(Plan plan)
     {
-        string[] parts = [.. new[] { plan.Subject, plan.Serial is { } serial ? $"serial {serial}" : null, plan.Nominal is { } nominal ? $"nominal {Phrases.Number(nominal, "Hz", 9)}" : null }.OfType<string>()];
-        return SafeText.Of(string.Join(", ", parts));
+        var parts = new List<string>();
+        if (plan.Subject is { } subject)
+            parts.Add(SafeText.Of(subject));
+        if (plan.Serial is { } serial)
+            parts.Add($"serial {SafeText.Of(serial)}");
+        if (plan.Nominal is { } nominal)
+            parts.Add($"nominal {Phrases.Number(nominal, "Hz", 9)}");
+        return string.Join(", ", parts);
     }
 
     private static void Sentences(Sheet sheet, string heading, IReadOnlyList<string> sentences)

@@ -89,8 +89,10 @@ internal static class Phrases
                 last = number;
                 continue;
             }
-            if (last > 0)
-                parts.Add(first == last ? HarmonicPrefix + last : $"{HarmonicPrefix}{first} to {HarmonicPrefix}{last}");
+            if (last > first + 1)
+                parts.Add($"{HarmonicPrefix}{first} to {HarmonicPrefix}{last}");
+            else
+                parts.AddRange(Enumerable.Range(first, last > 0 ? last - first + 1 : 0).Select(k => HarmonicPrefix + k));
             (first, last) = (number, number);
             if (number == 0 && quantity is not null)
                 parts.Add(quantity.Id);

@@ -6,6 +6,7 @@ namespace ScopeReader.Commands.Tables;
 /// <summary>A channel's readings as columns, or one above the other where the columns would not fit.</summary>
 internal static class ReadingSection
 {
+    private const string AsAbove = "as above";
     private const int Gap = 2, LeastForNotes = 22;
 
     public static void Write(Sheet sheet, IReadOnlyList<Reading> readings)
@@ -26,6 +27,10 @@ internal static class ReadingSection
         string[][] rows = [.. readings.Select(r => new[] { r.Quantity.Id, Phrases.Of(r), Phrases.How(r) })];
         if (rows.Length == 0)
             return;
+        // What one method gave stands together; saying the method once leaves the numbers in view.
+        for (int i = rows.Length - 1; i > 0; i--)
+            if (rows[i][2] == rows[i - 1][2] && rows[i][2].Length > AsAbove.Length)
+                rows[i][2] = AsAbove;
         if (rows.Max(r => r[0].Length) + rows.Max(r => r[1].Length) + 2 * Gap + LeastForNotes <= sheet.Width)
         {
             sheet.Columns(rows);
