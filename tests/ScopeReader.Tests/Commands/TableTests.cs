@@ -87,5 +87,5 @@ public class TableTests
 
     [Fact]
     public void Neighbouring_harmonics_are_said_as_a_run() =>
-        Assert.Equal("thd, harmonic-2 to harmonic-4, harmonic-6, harmonic-7, rms", Phrases.List([Quantities.Thd, .. new[] { 2, 3, 4, 6, 7 }.Select(Quantities.Harmonic), Quantities.Rms]));
+        Assert.Equal("thd, harmonic-2 to harmonic-4, harmonic-6, harmonic-7, rms", Phrases.List([Quantities.Thd, .. Enumerable.Range(2, 3).Select(Quantities.Harmonic), Quantities.Harmonic(6), Quantities.Harmonic(7), Quantities.Rms]));
 }
