@@ -79,14 +79,14 @@ internal sealed class HarmonicReport
 
     private void WriteWorst(List<Reading> written)
     {
-        if (_seen < _wanted)
-            _job.Sheet.Refuse("above-nyquist", Beyond("the worst harmonic is looked for among"), Quantities.WorstHarmonic);
-        else if (written.MaxBy(r => r.Value) is { } worst)
-            _job.Sheet.Add(new Reading(Quantities.WorstHarmonic, worst.Value, "dBc", worst.Budget, Method) { Count = _cycles, Note = $"{worst.Quantity.Id}, of harmonics 2 to {_wanted}" });
+        if (written.MaxBy(r => r.Value) is { } worst)
+            _job.Sheet.Add(new Reading(Quantities.WorstHarmonic, worst.Value, "dBc", worst.Budget, Method) { Count = _cycles, Note = $"{worst.Quantity.Id}, of harmonics 2 to {_seen}" });
+        else if (_seen < 2)
+            _job.Sheet.Refuse("above-nyquist", AboveNyquist(2), Quantities.WorstHarmonic);
         else
         {
             double bound = Decibels.OfAmplitudes(_harmonics.Skip(1).Max(h => h.Threshold) / Fundamental.Amplitude);
-            _job.Sheet.Refuse("below-noise", Text($"< {bound:F1} dBc: none of harmonics 2 to {_wanted} is resolved"), Quantities.WorstHarmonic);
+            _job.Sheet.Refuse("below-noise", Text($"< {bound:F1} dBc: none of harmonics 2 to {_seen} is resolved"), Quantities.WorstHarmonic);
         }
     }
 
@@ -94,7 +94,7 @@ internal sealed class HarmonicReport
     {
         if (_seen < _wanted)
         {
-            _job.Sheet.Refuse("above-nyquist", Beyond("thd counts"), Quantities.Thd, Quantities.ThdR);
+            _job.Sheet.Refuse("above-nyquist", Beyond(), Quantities.Thd, Quantities.ThdR);
             return;
         }
         ReadOnlySpan<HarmonicLevel> harmonics = _harmonics.AsSpan(1);
@@ -132,8 +132,8 @@ internal sealed class HarmonicReport
 
     private int Strongest() => _harmonics.Skip(1).MaxBy(h => h.Fitted)!.Order;
 
-    private string Beyond(string what) =>
-        Text($"{what} harmonics 2 to {_wanted}, and {_seen + 1} and above lie beyond half of the sample rate; sample faster, or set harmonics = {Math.Max(2, _seen)} in [levels]");
+    private string Beyond() =>
+        Text($"thd counts harmonics 2 to {_wanted}, and {_seen + 1} and above lie beyond half of the sample rate; sample faster, or set harmonics = {Math.Max(2, _seen)} in [levels]");
 
     // Over the record the wave is off the fitted one by up to x cycles at a harmonic: its level reads low by π²x²/6.
     private BudgetTerm Frequency(int order)

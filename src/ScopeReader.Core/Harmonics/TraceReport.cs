@@ -1,0 +1,177 @@
+using ScopeReader.Captures;
+using ScopeReader.Readings;
+using static ScopeReader.Harmonics.HarmonicAnalyser;
+
+namespace ScopeReader.Harmonics;
+
+/// <summary>Finds the lines of one spectrum trace and writes them down, or why not.</summary>
+internal sealed class TraceReport(SpectrumTrace trace, Plan plan, ReadingSheet sheet)
+{
+    private const string Method = "parabola";
+    private const double Million = 1e6, NearNominal = 0.01, ShareBetween = 0.01, PpmWorthSaying = 1;
+    private const int LongestOrder = 5;
+
+    private readonly ChainErrors _chain = new(plan, null);
+    private readonly int _wanted = Math.Clamp(plan.Levels.Harmonics, 2, Quantities.HighestHarmonic);
+
+    public void Write()
+    {
+        if (TraceLevels.Of(trace) is not { } levels)
+        {
+            string unit = trace.Unit.Length == 0 ? "no unit" : "the unit " + trace.Unit;
+            RefuseAll("unit", $"the trace has {unit}; expected dBm, dBV, dBµV, V or W: name it with units in [import]");
+            return;
+        }
+        int from = levels.AfterFeedThrough(), top = levels.Highest(Math.Min(from, levels.Count - 2), levels.Count - 2);
+        if (levels.Level(top) < levels.Noise(top).Threshold(levels.Count))
+        {
+            RefuseAll("no-line", "no line stands out of the noise; narrow the resolution bandwidth, or raise the level");
+            return;
+        }
+        if (levels.Line(top) is not { } peak)
+        {
+            RefuseAll("unresolved", Text($"fewer than 3 points lie on the line at {Engineering.Format(levels.Frequency(top), "Hz")}; narrow the span, or take more points"));
+            return;
+        }
+        WritePeak(levels, peak);
+
+        int order = Order(levels, peak, from);
+        if (order > 1 && FindNear(levels, peak.Frequency / order) is not { } _)
+            order = 1;
+        double fundamental = peak.Frequency / order;
+        WriteError(peak, order, levels.Spacing);
+        TraceLine? first = order == 1 ? peak : levels.Line(FindNear(levels, fundamental)!.Value);
+        if (first is null)
+            RefuseHarmonics("unresolved", Text($"fewer than 3 points lie on the fundamental at {Engineering.Format(fundamental, "Hz")}; narrow the span, or take more points"));
+        else
+            WriteHarmonics(levels, first, fundamental, from);
+        WriteSubharmonic(levels, peak, order);
+    }
+
+    private double Window => Math.Max(trace.ResolutionBandwidth ?? 0, 0);
+
+    // Index of the highest point near an expected line where it stands out of the noise; null where none does.
+    private int? FindNear(TraceLevels levels, double frequency)
+    {
+        double reach = Math.Max(Window, 2 * levels.Spacing);
+        if (frequency - reach < levels.Start || frequency + reach > levels.Stop)
+            return null;
+        int from = levels.Nearest(frequency - reach), to = levels.Nearest(frequency + reach), top = levels.Highest(from, to);
+        bool isPeak = top > 0 && top < levels.Count - 1 && levels.Level(top) >= levels.Level(top - 1) && levels.Level(top) >= levels.Level(top + 1);
+        return isPeak && levels.Level(top) > levels.Noise(top).Threshold(to - from + 1) ? top : null;
+    }
+
+    // Which harmonic the strongest line is: by the nominal frequency where the plan has one, else by lines between its own harmonics.
+    private int Order(TraceLevels levels, TraceLine peak, int from)
+    {
+        if (plan.Nominal is { } nominal)
+        {
+            double order = Math.Round(peak.Frequency / nominal);
+            return order is >= 1 and <= 10 && Math.Abs(peak.Frequency / (order * nominal) - 1) < NearNominal ? (int)order : 1;
+        }
+        for (int order = 2; order <= LongestOrder; order++)
+        {
+            double between = 0;
+            for (int j = 1; j < 3 * order; j++)
+                if (j % order != 0 && FindNear(levels, peak.Frequency * j / order) is { } found && found >= from)
+                    between += Decibels.PowerRatio(levels.Level(found) - peak.LevelDb);
+            if (between > ShareBetween)
+                return order;
+        }
+        return 1;
+    }
+
+    private void WritePeak(TraceLevels levels, TraceLine peak)
+    {
+        double frequency = peak.Frequency * _chain.FrequencyFactor;
+        Add(Quantities.PeakFrequency, frequency, "Hz", _chain.ForTime(frequency, peak.FrequencyTerms));
+        bool power = levels.Unit == "dBm";
+        Add(power ? Quantities.PeakPower : Quantities.PeakLevel, peak.LevelDb, levels.Unit, _chain.ForAbsoluteDecibels(peak.LevelTerms));
+        sheet.Refuse("unit", Text($"the trace is in {trace.Unit}; {(power ? "peak-power" : "peak-level")} has its level"), power ? Quantities.PeakLevel : Quantities.PeakPower);
+    }
+
+    private void WriteError(TraceLine peak, int order, double spacing)
+    {
+        if (plan.Nominal is not { } nominal)
+        {
+            sheet.Refuse("no-nominal", "no nominal frequency to compare with; add nominal to the plan, or give --nominal", Quantities.FrequencyError);
+            return;
+        }
+        double frequency = peak.Frequency / order * _chain.FrequencyFactor;
+        Budget budget = _chain.ForTime(frequency, peak.FrequencyTerms.Select(t => t.Times(1.0 / order))).Times(Million / nominal);
+        Add(Quantities.FrequencyError, (frequency - nominal) / nominal * Million, "ppm", budget);
+        var own = new Budget(budget.Terms.Where(t => !t.OfChain));
+        if (own.ExpandedUncertainty > PpmWorthSaying)
+            sheet.Add(new Finding("frequency-from-trace",
+                Text($"points {Engineering.Format(spacing, "Hz", 3)} apart give the frequency to ±{Engineering.Format(own.ExpandedUncertainty, "ppm", 2)} at best; for less, capture the waveform or narrow the span"),
+                "span"));
+    }
+
+    private void WriteHarmonics(TraceLevels levels, TraceLine first, double fundamental, int from)
+    {
+        var found = new List<Reading>();
+        int inside = 1;
+        for (int k = 2; k <= _wanted; k++)
+        {
+            double expected = k * fundamental;
+            if (expected + Math.Max(Window, 2 * levels.Spacing) > levels.Stop || levels.Nearest(expected) < from)
+            {
+                sheet.Refuse("outside-span", Text($"harmonic {k} at {Engineering.Format(expected, "Hz")} lies outside the span; widen it"), Quantities.Harmonic(k));
+                continue;
+            }
+            inside = k;
+            if (FindNear(levels, expected) is not { } top)
+            {
+                double bound = levels.Noise(levels.Nearest(expected)).Threshold(5) - first.LevelDb;
+                sheet.Refuse("below-noise", Text($"< {bound:F1} dBc: no line stands out of the noise there; narrow the resolution bandwidth"), Quantities.Harmonic(k));
+            }
+            else if (levels.Line(top) is not { } line)
+                sheet.Refuse("unresolved", "fewer than 3 points lie on the line; narrow the span, or take more points", Quantities.Harmonic(k));
+            else
+                found.Add(new Reading(Quantities.Harmonic(k), line.LevelDb - first.LevelDb, "dBc", _chain.ForRelativeDecibels([.. line.LevelTerms, .. Of(first)]), Method));
+        }
+        foreach (Reading reading in found)
+            sheet.Add(reading);
+        if (found.MaxBy(r => r.Value) is { } worst)
+            sheet.Add(new Reading(Quantities.WorstHarmonic, worst.Value, "dBc", worst.Budget, Method) { Note = $"{worst.Quantity.Id}, of harmonics 2 to {inside}" });
+        else
+            sheet.Refuse(inside > 1 ? "below-noise" : "outside-span", inside > 1 ? Text($"none of harmonics 2 to {inside} is resolved") : "no harmonic lies inside the span; widen it", Quantities.WorstHarmonic);
+        WriteOwn(found);
+    }
+
+    private static IEnumerable<BudgetTerm> Of(TraceLine fundamental) =>
+        fundamental.LevelTerms.Select(t => BudgetTerm.Normal(t.Name + " of fundamental", t.Value, t.Sensitivity));
+
+    private void WriteOwn(List<Reading> harmonics)
+    {
+        if (plan.Chain.DistortionFloorDbc is not { } floor)
+            return;
+        string[] own = [.. harmonics.Where(r => r.Value <= floor).Select(r => r.Quantity.Id)];
+        if (own.Length > 0)
+            sheet.Add(new Finding("own-distortion",
+                Text($"{string.Join(", ", own)}: at the instrument's own floor of {floor:F1} dBc, so it may be made there; with 10 dB more attenuation a line of the source stays where it is in dBc"),
+                "instrument"));
+    }
+
+    private void WriteSubharmonic(TraceLevels levels, TraceLine peak, int order)
+    {
+        if (order == 1 && FindNear(levels, peak.Frequency / 2) is { } half)
+            sheet.Add(new Finding("subharmonic",
+                Text($"a line at half of the strongest line's frequency, {levels.Level(half) - peak.LevelDb:F1} dBc: a doubler or divider leaks, or the strongest line is a second harmonic"), "half"));
+    }
+
+    private void RefuseAll(string code, string reason)
+    {
+        sheet.Refuse(code, reason, Quantities.PeakFrequency, Quantities.PeakPower, Quantities.PeakLevel, Quantities.FrequencyError);
+        RefuseHarmonics(code, reason);
+    }
+
+    private void RefuseHarmonics(string code, string reason)
+    {
+        for (int k = 2; k <= _wanted; k++)
+            sheet.Refuse(code, reason, Quantities.Harmonic(k));
+        sheet.Refuse(code, reason, Quantities.WorstHarmonic);
+    }
+
+    private void Add(Quantity quantity, double value, string unit, Budget budget) => sheet.Add(new Reading(quantity, value, unit, budget, Method));
+}
