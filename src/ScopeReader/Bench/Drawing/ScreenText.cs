@@ -55,6 +55,19 @@ internal static class ScreenText
         return clean[..i] + "…";
     }
 
+    /// <summary>A file's name cut to a width: without its ending first, then out of its middle, for its two ends tell files apart.</summary>
+    public static string CutName(string name, int width)
+    {
+        string clean = Clean(name);
+        if (Width(clean) <= width)
+            return clean;
+        clean = Path.GetFileNameWithoutExtension(clean);
+        if (Width(clean) <= width || width < 5)
+            return Cut(clean, width);
+        int end = (width - 1) / 2;
+        return Cut(clean, width - end) + CutStart(clean, end + 1)[1..];
+    }
+
     /// <summary>The end of a clean text, for paths, whose last part says most.</summary>
     public static string CutStart(string clean, int width)
     {

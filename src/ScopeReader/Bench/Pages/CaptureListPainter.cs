@@ -23,7 +23,8 @@ internal static class CaptureListPainter
             int y = box.Top + 1 + row;
             (string word, Ink ink) = Words.Of(capture);
             grid.Text(box.Left, y, selected ? "▸" : " ", Ink.Accent);
-            grid.Text(box.Left + 2, y, capture.Name, selected ? Ink.Strong : Ink.Plain, box.Width - WordWidth - 4);
+            int room = box.Width - Math.Max(WordWidth - 1, word.Length) - 4;
+            grid.Text(box.Left + 2, y, ScreenText.CutName(capture.Name, room), selected ? Ink.Strong : Ink.Plain, room);
             grid.TextEnding(box.Right - 1, y, word, ink, WordWidth);
         }
         for (int y = box.Top; y < box.Bottom; y++)

@@ -55,7 +55,7 @@ internal static class DetailPage
         lines.Add(new(Words.Of(reading), Ink.Strong, "value"));
         string factor = budget.CoverageFactor is { } k ? string.Create(CultureInfo.InvariantCulture, $", 95 %, k = {k:F2}") : "";
         lines.Add(new(Of(budget.ExpandedUncertainty) + factor, Ink.Plain, "expanded uncertainty"));
-        string freedom = budget.DegreesOfFreedom is { } n ? string.Create(CultureInfo.InvariantCulture, $", {n:F0} degrees of freedom") : "";
+        string freedom = budget.DegreesOfFreedom is { } n and < 1000 ? string.Create(CultureInfo.InvariantCulture, $", {n:F0} degrees of freedom") : "";
         lines.Add(new(Of(budget.StandardUncertainty) + freedom, Ink.Plain, "standard uncertainty"));
         lines.Add(new(Of(budget.Repeatability), Ink.Plain, "repeatability"));
         lines.Add(new(reading.Method + (reading.IsPrimary ? "" : "; not the primary reading of this quantity"), Ink.Plain, "method"));

@@ -25,23 +25,23 @@ internal static class ReadingTablePainter
         PaintPosition(grid, box, rows.Count, scroll);
     }
 
-    // quantity 22 | value right-aligned 11 | ± uncertainty 11 | unit 6 | verdict | limit | method
+    // quantity 21 | value right-aligned 11 | ± uncertainty 13 | unit 5 | verdict | limit | method
     private static void PaintWide(CellGrid grid, Box box, int y, ReadingRow row, bool selected)
     {
         int x = box.Left + 2;
         grid.Text(x, y, row.Quantity.Id, selected ? Ink.Strong : Ink.Plain, 21);
-        x += 22;
+        x += 21;
         if (row.Reading is { } reading)
         {
             (string value, string uncertainty, string unit) = Engineering.Parts(reading.Value, reading.Budget.ExpandedUncertainty, reading.Unit);
             grid.TextEnding(x + 11, y, Words.Minus(value), selected ? Ink.Strong : Ink.Plain, 11);
             if (uncertainty.Length > 0)
-                grid.Text(x + 12, y, "± " + uncertainty, Ink.Plain, 11);
-            grid.Text(x + 24, y, unit, Ink.Quiet, 6);
+                grid.Text(x + 12, y, "± " + uncertainty, Ink.Plain, 13);
+            grid.Text(x + 26, y, unit, Ink.Quiet, 5);
         }
         else
             grid.TextEnding(x + 11, y, "—", Ink.Quiet);
-        x += 31;
+        x += 32;
         int right = box.Right - 2;
         if (row.Verdict is { } verdict)
         {

@@ -25,7 +25,7 @@ internal sealed record WorkLayout(Box List, Box About, Box Plot, Box Tabs, Box P
         int reason = small ? 1 : height < 32 ? 2 : 3, panel = small ? Math.Max(3, (height - 4) / 2 - 1) : Math.Max(6, (height - 7) * 2 / 5);
         int keys = height - 1, reasonTop = keys - reason, panelTop = reasonTop - panel, tabs = panelTop - 1, top = 1;
         // One capture, or a narrow screen, needs no list: the row above the plot names it.
-        int list = captures < 2 || width < 70 ? 0 : Math.Clamp(width / 4, 25, 40);
+        int list = captures < 2 || width < 70 ? 0 : Math.Clamp(width / 4, 27, 40);
         int left = list == 0 ? 0 : list + 1, upper = tabs - top;
         return new WorkLayout(
             new Box(0, top, list, list == 0 ? 0 : upper),

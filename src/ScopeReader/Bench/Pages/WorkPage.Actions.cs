@@ -78,7 +78,7 @@ internal sealed partial class WorkPage
 
     private void Whole() => Change((_, source) => PlotWindow.Whole(source));
 
-    // Ten rise times, or without one twenty samples, show an edge and what follows it.
+    // Ten rise times, or twice the settling where that is longer, show an edge and what follows it; without either, twenty samples.
     private void Edge(bool forward)
     {
         if (_bench.Selected is not { View: { Channel: Waveform waveform } view } capture)
@@ -86,7 +86,7 @@ internal sealed partial class WorkPage
         IReadOnlyList<Reading> readings = capture.ChannelMeasured?.Readings ?? [];
         double? Value(Quantity quantity) => readings.FirstOrDefault(r => r.IsPrimary && r.Quantity == quantity)?.Value;
         double level = ((Value(Quantities.HighLevel) ?? view.Source.Highest) + (Value(Quantities.LowLevel) ?? view.Source.Lowest)) / 2;
-        double width = Math.Max(10 * (Value(Quantities.RiseTime) ?? 0), 20 * waveform.Interval);
+        double width = Math.Max(Math.Max(10 * (Value(Quantities.RiseTime) ?? 0), 2 * (Value(Quantities.RiseSettling) ?? 0)), 20 * waveform.Interval);
         // Once zoomed in to edges, the person's own zoom stays.
         double now = view.Window.Right - view.Window.Left;
         view.ToEdge(level, now <= 4 * width ? now : width, forward);

@@ -90,17 +90,17 @@ internal sealed partial class WorkPage : Page
         string channel = view.Channel.Segment > 1 ? $"{view.Channel.Name} segment {view.Channel.Segment}" : view.Channel.Name;
         string of = capture.ChannelCount > 1 ? $" ({capture.ChannelIndex + 1} of {capture.ChannelCount})" : "";
         x = grid.Text(x, box.Top, channel + of, Ink.Quiet, end - x) + 2;
-        (string full, string brief) = Extent(view);
-        grid.Text(x, box.Top, full.Length <= end - x ? full : brief, Ink.Quiet, end - x);
+        // Half a number would be a wrong one: the longest that fits whole, or none.
+        grid.Text(x, box.Top, Extents(view).FirstOrDefault(e => e.Length <= end - x) ?? "", Ink.Quiet);
     }
 
-    private static (string Full, string Brief) Extent(ChannelView view)
+    private static string[] Extents(ChannelView view)
     {
         string count = Words.Count(view.Channel.Count);
         if (view.Channel is not Captures.Waveform waveform)
-            return ($"{count} points", count);
+            return [$"{count} points"];
         string interval = Words.Number(waveform.Interval, waveform.Axis.TimeUnit);
-        return ($"{count} samples, {interval} apart", $"{count} × {interval}");
+        return [$"{count} samples, {interval} apart", $"{count} × {interval}", $"{count} samples"];
     }
 
     private void PaintPlot(CellGrid grid, OpenCapture capture)
@@ -183,12 +183,13 @@ internal sealed partial class WorkPage : Page
         }
         ReadingRow row = rows[_readings.Selected];
         IReadOnlyList<string> lines = ScreenText.Wrap(row.Reason(), _layout.Reason.Width - 2);
-        Ink ink = row.Verdict is { } verdict ? Words.Of(verdict.Outcome).Ink : Ink.Quiet;
         for (int i = 0; i < _layout.Reason.Height && i < lines.Count; i++)
         {
             bool cut = i == _layout.Reason.Height - 1 && lines.Count > _layout.Reason.Height;
-            grid.Text(_layout.Reason.Left + 1, _layout.Reason.Top + i, cut ? lines[i] + " …" : lines[i], ink, _layout.Reason.Width - 1);
+            grid.Text(_layout.Reason.Left + 1, _layout.Reason.Top + i, cut ? lines[i] + " …" : lines[i], row.Verdict is null ? Ink.Quiet : Ink.Plain, _layout.Reason.Width - 1);
         }
+        if (row.Verdict is { } verdict)
+            grid.Text(_layout.Reason.Left + 1, _layout.Reason.Top, Words.Of(verdict.Outcome).Word, Words.Of(verdict.Outcome).Ink);
     }
 
     private static void PaintWelcome(CellGrid grid)

@@ -141,7 +141,7 @@ internal sealed class PlotPainter
     {
         for (int y = area.Top; y < area.Bottom; y++)
             grid.Put(area.Left - 1, y, '│', Ink.Quiet);
-        var levels = new AxisTicks(window.Bottom, window.Top, Math.Max(2, area.Height / 3), source.YUnit);
+        var levels = new AxisTicks(window.Bottom, window.Top, Math.Max(2, area.Height / 2), source.YUnit);
         for (int i = 0; i < levels.Count; i++)
         {
             int y = area.Top + Math.Clamp(Row(levels.At(i), window) / 4, 0, area.Height - 1);

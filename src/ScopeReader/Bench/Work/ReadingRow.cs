@@ -24,7 +24,7 @@ internal sealed record ReadingRow(Quantity Quantity, Reading? Reading, Verdict? 
         var parts = new List<string>();
         if (Verdict is { } verdict)
         {
-            string probable = verdict.Probability is { } p ? FormattableString.Invariant($", {Math.Clamp(100 * p, 0, 100):F0} % probably inside") : "";
+            string probable = verdict.Probability is { } p ? FormattableString.Invariant($", inside with {Math.Clamp(100 * p, 0, 100):F0} % probability") : "";
             parts.Add($"{Words.Of(verdict.Outcome).Word}{probable}: {verdict.Reason}");
         }
         if (Reading is { } reading)

@@ -29,6 +29,17 @@ public class ScreenTextTests
         Assert.Equal("…器", ScreenText.CutStart("測定器", 3));
     }
 
+    [Theory]
+    [InlineData("if-source-7.csv", 15, "if-source-7.csv")]
+    [InlineData("if-source-7.csv", 11, "if-source-7")]
+    [InlineData("node-breadboard.csv", 11, "node-…board")]
+    [InlineData("測定器測定器測定器7.csv", 8, "測定…器7")]
+    public void A_name_keeps_the_ends_that_tell_it_from_others(string name, int width, string cut)
+    {
+        Assert.Equal(cut, ScreenText.CutName(name, width));
+        Assert.InRange(ScreenText.Width(ScreenText.CutName(name, width)), 1, width);
+    }
+
     [Fact]
     public void Wrapped_lines_keep_every_word_and_the_width()
     {
