@@ -26,6 +26,9 @@ public sealed class BoundedNormal
         // Below these ratios one part is lost in the rounding of the other.
         if (_halfWidth <= 1e-6 * _sigma)
             return _sigma == 0 ? (x < 0 ? 0 : 1) : NormalCumulative(x / _sigma);
+        // Farther out the normal part has nothing left in a double, and at infinity G − G would be no number.
+        if (Math.Abs(x) > _halfWidth + 40 * _sigma)
+            return x < 0 ? 0 : 1;
         if (_sigma <= 1e-9 * _halfWidth)
             return Math.Clamp(0.5 + x / (2 * _halfWidth), 0, 1);
         return Math.Clamp(_sigma / (2 * _halfWidth) * (G((x + _halfWidth) / _sigma) - G((x - _halfWidth) / _sigma)), 0, 1);

@@ -15,6 +15,18 @@ public class BoundedNormalTests
         // Closed form: the 97.5 % quantile of the standard normal, 1.959963984540054 (any table). Tolerance: the quantile's own 1e-12.
         Assert.Equal(1.959963984540054 * 2, new BoundedNormal(0, 2).HalfWidth(0.95), 1e-11);
 
+    [Theory]
+    [InlineData(3, 2)]
+    [InlineData(3, 0)]
+    [InlineData(0, 2)]
+    public void Some_error_is_certain_and_an_endless_one_impossible(double halfWidth, double sigma)
+    {
+        // Axioms of probability. A limit with one bound asks for exactly these.
+        var error = new BoundedNormal(halfWidth, sigma);
+        Assert.Equal(1, error.Cumulative(double.PositiveInfinity));
+        Assert.Equal(0, error.Cumulative(double.NegativeInfinity));
+    }
+
     [Fact]
     public void Two_equal_spreads_agree_with_a_convolution_by_quadrature()
     {
