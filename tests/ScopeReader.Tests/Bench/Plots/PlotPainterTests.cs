@@ -40,15 +40,20 @@ public class PlotPainterTests
     }
 
     [Fact]
-    public void Ten_million_samples_redraw_in_milliseconds()
+    public void Ten_million_samples_cost_little_more_to_draw_than_ten_thousand() =>
+        // The groups that a column of dots is made of grow with the logarithm: from 10^4 to 10^7 by a factor of 7/4. A walk through the
+        // samples would cost a thousand times as much. 8 leaves room for memory outside the cache and for a busy machine.
+        Assert.InRange(FastestFrame(10_000_000) / FastestFrame(10_000), 0, 8);
+
+    private static double FastestFrame(int count)
     {
         var random = new Random(7);
-        PlotSource source = PlotSource.Of(new Waveform("CH1", "V", new TimeAxis(0, 1e-9, AxisSource.Column), [.. Enumerable.Range(0, 10_000_000).Select(_ => random.NextDouble())]));
+        PlotSource source = PlotSource.Of(new Waveform("CH1", "V", new TimeAxis(0, 1e-9, AxisSource.Column), [.. Enumerable.Range(0, count).Select(_ => random.NextDouble())]));
         var grid = new CellGrid();
         var painter = new PlotPainter();
         PlotWindow window = PlotWindow.Whole(source).Wider(0.5, 0.37, source);
         TimeSpan fastest = TimeSpan.MaxValue;
-        for (int i = 0; i < 20; i++)
+        for (int i = 0; i < 30; i++)
         {
             grid.Reset(200, 60);
             long start = System.Diagnostics.Stopwatch.GetTimestamp();
@@ -56,8 +61,7 @@ public class PlotPainterTests
             TimeSpan taken = System.Diagnostics.Stopwatch.GetElapsedTime(start);
             fastest = taken < fastest ? taken : fastest;
         }
-        // About 2 ms where it was written; a walk through the samples takes 10 ms and more on any machine of today. The fastest counts: others use the machine too.
-        Assert.True(fastest < TimeSpan.FromMilliseconds(8), $"{fastest.TotalMilliseconds:F1} ms");
+        return fastest.TotalMilliseconds;
     }
 
     private static string Painted(int width, int height, Channel channel, Func<PlotWindow, PlotSource, PlotWindow>? change = null, IReadOnlyList<PlotMark>? marks = null)
