@@ -19,11 +19,12 @@ internal static class CaptureMeasurer
     {
         try
         {
-            return new MeasuredFile(file, Analysis.Measure(Read(file, plan, channel, cancellation), plan, null, cancellation), null);
+            Capture capture = Read(file, plan, channel, cancellation);
+            return new MeasuredFile(capture.File, Analysis.Measure(capture, plan, null, cancellation), null);
         }
         catch (ImportException e)
         {
-            return new MeasuredFile(file, null, e.Message);
+            return new MeasuredFile(e.File, null, e.Message);
         }
     }
 

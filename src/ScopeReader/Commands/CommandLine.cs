@@ -49,6 +49,12 @@ internal static class CommandLine
         {
             return ExitStatus.Interrupted;
         }
+        catch (IOException e)
+        {
+            // Captures and plans have their own exceptions: this is the output, a full disk for one.
+            surroundings.Error.WriteLine(SafeText.Of($"scopereader: the output could not be written: {e.Message}"));
+            return ExitStatus.Unreadable;
+        }
         catch (Exception e)
         {
             // The last word before the process ends: whatever it was, the person gets a line and a script its status.

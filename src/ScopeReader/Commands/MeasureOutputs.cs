@@ -6,23 +6,32 @@ namespace ScopeReader.Commands;
 /// <summary>The table for people.</summary>
 internal sealed class TableOutput(MeasureRun run) : IMeasureOutput
 {
+    private readonly List<(string Word, string File)> _files = [];
     private bool _started;
 
     public bool InOrder => true;
 
     public void Write(MeasuredFile file)
     {
+        _files.Add((Phrases.Of(file), SafeText.Of(file.File)));
         if (file.Measurement is not { } measurement)
             return;
         Surroundings to = run.Surroundings;
         if (_started)
-            to.Output.Write('\n');
+            to.Output.Write("\n\n");
         _started = true;
         to.Output.Write(MeasurementTable.Of(measurement, run.Plan, run.Explain, to.Width(), to.Colour));
     }
 
+    // The tables have scrolled away by then: what each file came to stays in view.
     public void Finish()
     {
+        if (_files.Count < 2 || !_started)
+            return;
+        var sheet = new Sheet(run.Surroundings.Width(), run.Surroundings.Colour);
+        sheet.Heading("All files");
+        sheet.Columns([.. _files.Select(f => new[] { f.Word, f.File })]);
+        run.Surroundings.Output.Write("\n\n" + sheet);
     }
 }
 

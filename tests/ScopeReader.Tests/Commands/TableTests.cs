@@ -23,7 +23,8 @@ public class TableTests
         for (int k = 2; k <= 6; k++)
             sheet.Add(new Reading(Quantities.Harmonic(k), -10 * k, "dBc", Budget(0.1), "harmonic-fit"));
         sheet.Refuse("between-samples", "the whole edge lies between two samples 10 ns apart; sample faster", Quantities.RiseTime, Quantities.FallTime);
-        sheet.Refuse("too-high", "above half the sample rate", Quantities.Harmonic(7), Quantities.Harmonic(8), Quantities.Harmonic(10));
+        foreach (int k in (int[])[7, 8, 10])
+            sheet.Refuse("too-high", $"{k} times the frequency is above half the sample rate", Quantities.Harmonic(k));
         sheet.Add(new Finding("ringing-kind", "ringing starts at each edge and decays: it is not an oscillation of its own", "edge-excited"));
         ChannelMeasurement channel = new(Wave, sheet.Readings, sheet.NotMeasured, sheet.Findings, Judge.Channel(Plan, Wave, sheet));
         return new Measurement(new Capture("if.csv", new string('a', 64), [Wave], ["the unit is assumed to be V"]), [channel], ["A probe's ground clip is joined to earth."], Outcome.Error);

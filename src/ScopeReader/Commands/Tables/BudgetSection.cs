@@ -17,15 +17,17 @@ internal static class BudgetSection
         foreach (Reading reading in readings)
         {
             Budget budget = reading.Budget;
+            // A level is in dBc or dBm; how far it may be off is in dB.
+            string unit = reading.Unit.StartsWith("dB", StringComparison.Ordinal) ? "dB" : reading.Unit;
             string k = budget.CoverageFactor is { } factor ? string.Create(CultureInfo.InvariantCulture, $", k = {factor:F2}") : "";
-            sheet.Line($"{reading.Quantity} ({reading.Method}): u = {Amount(budget.StandardUncertainty, reading.Unit, 2)}, "
-                + $"U = {Amount(budget.ExpandedUncertainty, reading.Unit, 2)} (95 %{k}), repeatability {Amount(budget.Repeatability, reading.Unit, 2)}");
+            sheet.Line($"{reading.Quantity} ({reading.Method}): u = {Amount(budget.StandardUncertainty, unit, 2)}, "
+                + $"U = {Amount(budget.ExpandedUncertainty, unit, 2)} (95 %{k}), repeatability {Amount(budget.Repeatability, unit, 2)}");
             BudgetTerm[] terms = [.. budget.Terms.OrderByDescending(t => t.Contribution)];
             if (sheet.Width < Narrow)
                 foreach (BudgetTerm term in terms)
-                    sheet.Indented($"{SafeText.Of(term.Name)} {Amount(term.Contribution, reading.Unit, 2)}, {Kind(term)}");
+                    sheet.Indented($"{SafeText.Of(term.Name)} {Amount(term.Contribution, unit, 2)}, {Kind(term)}");
             else
-                sheet.Columns([.. terms.Select(t => new[] { "  " + SafeText.Of(t.Name), Amount(t.Contribution, reading.Unit, 2), Share(t, budget), Kind(t) })]);
+                sheet.Columns([.. terms.Select(t => new[] { "  " + SafeText.Of(t.Name), Amount(t.Contribution, unit, 2), Share(t, budget), Kind(t) })]);
         }
     }
 

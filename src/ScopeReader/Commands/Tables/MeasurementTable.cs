@@ -53,10 +53,12 @@ internal static class MeasurementTable
         if (channel.NotMeasured.Count > 0)
         {
             sheet.Heading("Not measured");
-            foreach (IGrouping<string, NotMeasured> same in channel.NotMeasured.GroupBy(n => n.Reason))
+            // Each harmonic's reason may name its own frequency: one of them stands for all that share the code.
+            foreach (IGrouping<string, NotMeasured> same in channel.NotMeasured.GroupBy(n => Phrases.HarmonicNumber(n.Quantity) > 0 ? n.Code : n.Reason))
             {
+                string reason = same.First().Reason;
                 sheet.Line(Phrases.List(same.Select(n => n.Quantity)));
-                sheet.Indented(SafeText.Of(same.Key));
+                sheet.Indented(SafeText.Of(same.All(n => n.Reason == reason) ? reason : $"{reason}; likewise the others"));
             }
         }
         if (explain)

@@ -21,6 +21,17 @@ internal static class Phrases
         _ => "NOT APPLICABLE",
     };
 
+    /// <summary>A file's outcome in a word that stands out.</summary>
+    public static string Of(MeasuredFile file) => file switch
+    {
+        { Error: not null } => "UNREADABLE",
+        { Outcome: Outcome.Unjudged } => "MEASURED",
+        { Outcome: Outcome.Pass } => Of(VerdictOutcome.Pass),
+        { Outcome: Outcome.Undecided } => Of(VerdictOutcome.Undecided),
+        { Outcome: Outcome.Fail } => Of(VerdictOutcome.Fail),
+        _ => Of(VerdictOutcome.NotMeasured),
+    };
+
     /// <summary>A value with its uncertainty, the unit once: "455.012 ± 0.011 kHz".</summary>
     public static string Of(Reading reading)
     {
