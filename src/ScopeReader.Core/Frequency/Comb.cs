@@ -5,7 +5,8 @@ namespace ScopeReader.Frequency;
 /// <summary>The lines of a periodic wave, as far as a frequency estimate is disturbed by them.</summary>
 internal sealed class Comb
 {
-    private const int MostHarmonics = 20;
+    private const int FewestHarmonics = 20, MostHarmonics = 64, HighestFolded = 1000;
+    private const double MostWork = 3e7;
 
     private readonly HarmonicModel _model;
     private readonly int _count;
@@ -26,45 +27,50 @@ internal sealed class Comb
     {
         // A harmonic within a cycle a record of half the sample rate cannot be told from its own image.
         int most = (int)((0.5 - 1.0 / samples.Length) / fundamental);
-        int wanted = Math.Min(most, Math.Max(atLeast, Math.Min(MostHarmonics, samples.Length / 16)));
+        int affordable = (int)Math.Clamp(MostWork / samples.Length, FewestHarmonics, MostHarmonics);
+        int wanted = Math.Min(most, Math.Max(atLeast, Math.Min(affordable, samples.Length / 16)));
         for (int harmonics = wanted; harmonics >= atLeast && harmonics > 0; harmonics = harmonics == wanted ? atLeast : 0)
             if (HarmonicFit.At(samples, fundamental, harmonics) is { } fit)
                 return new Comb(fit.Model, new NoiseSpectrum(fit.Model.Residual(samples), fundamental, fit.Unknowns), samples.Length);
         return null;
     }
 
-    /// <summary>Every line but one, images at negative frequencies and folded harmonics too: its place from that one, cycles a record, and its amplitude over that one's.</summary>
+    /// <summary>Every line but one, images at negative frequencies too.</summary>
     /// <param name="order">The line that is left out.</param>
-    public IEnumerable<(double Distance, double Ratio)> Around(int order)
+    public IEnumerable<Neighbour> Around(int order)
     {
-        double cycles = _model.Frequency * _count, one = _model.Amplitude(order);
-        yield return (-2 * order * cycles, 1);
-        yield return (_count - 2 * order * cycles, 1);
+        double cycles = _model.Frequency * _count, one = _model.Amplitude(order), phase = _model.Phase(order);
+        yield return new Neighbour(-2 * order * cycles, 1, -2 * phase);
+        // Its next image, a sample rate up: half-integer instants of an even record change sign from one to the other.
+        yield return new Neighbour(_count - 2 * order * cycles, _count % 2 == 0 ? -1 : 1, -2 * phase);
         for (int k = 1; k <= _model.Harmonics; k++)
             if (k != order)
             {
                 double ratio = _model.Amplitude(k) / one;
-                yield return ((k - order) * cycles, ratio);
-                yield return (-(k + order) * cycles, ratio);
+                yield return new Neighbour((k - order) * cycles, ratio, _model.Phase(k) - phase);
+                yield return new Neighbour(-(k + order) * cycles, ratio, -_model.Phase(k) - phase);
             }
-        foreach ((double distance, double ratio) in Folded(order))
-            yield return (distance, ratio / one);
     }
 
-    // Harmonics above half the sample rate are not seen but fold onto the comb where the two rates are nearly commensurate.
-    // They are taken to fall off as those of a step do, 1/k, from the strongest of the last two that are seen.
-    private IEnumerable<(double Distance, double Amplitude)> Folded(int order)
+    /// <summary>Harmonics that are not modelled and fold close to one that is, where the sample rate is nearly commensurate.</summary>
+    /// <param name="order">The line they fold onto.</param>
+    /// <remarks>They are taken to fall off as those of a step do, 1/k, from the strongest of the last two that are modelled. Their phases are not known.</remarks>
+    public IEnumerable<Neighbour> Folded(int order)
     {
         int seen = _model.Harmonics;
-        if ((seen + 1) * _model.Frequency < 0.5 - 1.0 / _count)
-            yield break;
-        double last = Math.Max(_model.Amplitude(seen), _model.Amplitude(Math.Max(1, seen - 1)));
-        for (int k = seen + 1; k <= 4 * seen; k++)
+        double last = Math.Max(_model.Amplitude(seen), _model.Amplitude(Math.Max(1, seen - 1))) / _model.Amplitude(order);
+        for (int k = seen + 1; k <= Math.Min(HighestFolded, 2 / _model.Frequency + 2); k++)
         {
             double frequency = k * _model.Frequency;
             double distance = (Math.Abs(frequency - Math.Round(frequency)) - order * _model.Frequency) * _count;
             if (Math.Abs(distance) < 0.4 * _model.Frequency * _count)
-                yield return (distance, last * seen / k);
+                yield return new Neighbour(distance, last * seen / k, 0);
         }
     }
+
+    /// <summary>Another line beside the one that is measured.</summary>
+    /// <param name="Distance">Its place from that one, cycles a record.</param>
+    /// <param name="Ratio">Its amplitude over that one's.</param>
+    /// <param name="Phase">Its phase less that one's at the middle of the record, rad.</param>
+    public readonly record struct Neighbour(double Distance, double Ratio, double Phase);
 }

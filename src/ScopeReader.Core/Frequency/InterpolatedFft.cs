@@ -45,29 +45,30 @@ public static class InterpolatedFft
         double ratio = Math.Sqrt(variance * spectrum.WindowPower / 2) / largest;
         double slope = 3 / ((1 + alpha) * (1 + alpha)), toCycles = 1.0 / length / order;
         double noise = slope * ratio * Math.Sqrt(1 + alpha * alpha - 2 * NeighbourCorrelation * alpha);
+        double leakage = Leakage(comb.Around(order), alpha, offset, side);
+        double folded = comb.Folded(order).Sum(line => Math.Abs(Change(line, alpha, offset, side))) / Window.Hann.Response(offset);
         return new FrequencyEstimate(Method, frequency,
             [
                 BudgetTerm.Normal("noise", noise * toCycles, degreesOfFreedom: degreesOfFreedom),
-                BudgetTerm.Rectangular("leakage", Math.Sqrt(3) * slope * Leakage(comb, order, alpha, offset, side, frequency * length) * toCycles),
+                // Known, but left in: an error of that size.
+                BudgetTerm.Rectangular("leakage", Math.Sqrt(3) * slope * Math.Abs(leakage) * toCycles),
+                BudgetTerm.Rectangular("folding", slope * folded * toCycles),
             ],
             (int)(frequency * length));
     }
 
-    // Rms change of α by the other lines, each of unknown phase.
-    private static double Leakage(Comb comb, int order, double alpha, double offset, int side, double cycles)
+    // Change of α by other lines, each turned into the phase of the line that is measured, in the middle of the record.
+    private static double Leakage(IEnumerable<Comb.Neighbour> lines, double alpha, double offset, int side)
     {
-        double square = 0, main = Window.Hann.Response(offset);
-        foreach ((double distance, double ratio) in comb.Around(order))
-            square += Square(distance, ratio);
-        // The mean that was taken off leaves minus the tone's own mean over the broken cycle at zero frequency.
-        square += Square(-order * cycles, 2 * Math.Sin(Math.PI * order * cycles) / (Math.PI * order * cycles));
-        return Math.Sqrt(square / 2) / main;
+        double sum = 0;
+        foreach (Comb.Neighbour line in lines)
+            sum += Change(line, alpha, offset, side) * Math.Cos(line.Phase);
+        return sum / Window.Hann.Response(offset);
+    }
 
-        double Square(double distance, double ratio)
-        {
-            double atLargest = Window.Hann.Response(side * distance + offset), atSecond = Window.Hann.Response(side * distance + offset - 1);
-            double change = ratio * (atSecond - alpha * atLargest);
-            return change * change;
-        }
+    private static double Change(Comb.Neighbour line, double alpha, double offset, int side)
+    {
+        double atLargest = Window.Hann.Response(side * line.Distance + offset), atSecond = Window.Hann.Response(side * line.Distance + offset - 1);
+        return line.Ratio * (atSecond - alpha * atLargest);
     }
 }

@@ -7,6 +7,8 @@ internal sealed class LineSpectrum
 {
     // A wave's period is longer than the strongest line's where lines between its harmonics hold a hundredth of its power.
     private const double ShareBetween = 0.01;
+    // Over the median of noise: a hundred places are looked at, and noise must pass at none of them in a thousand records.
+    private const double StandsOut = 40;
     private const int LowestBin = 2, LongestOrder = 8, CombReach = 4;
 
     private readonly double[] _magnitudes;
@@ -90,7 +92,7 @@ internal sealed class LineSpectrum
                 peak = i;
         bool isPeak = _magnitudes[peak] >= _magnitudes[peak - 1] && _magnitudes[peak] >= _magnitudes[peak + 1];
         double power = _magnitudes[peak] * _magnitudes[peak];
-        return isPeak && power > 20 * MedianPower(peak - 24, peak + 25) ? power : 0;
+        return isPeak && power > StandsOut * MedianPower(peak - 32, peak + 33) ? power : 0;
     }
 
     private double MedianPower(int from, int to)

@@ -51,12 +51,15 @@ public sealed record SineFit(double Frequency, double Amplitude, double Phase, d
             return null;
         (double variance, double degreesOfFreedom) = comb.Noise.Near(frequency);
         double pull = 0;
-        foreach ((double distance, double ratio) in comb.Around(1).Skip(2)) // The sine's own images are fitted with it.
-            pull += Math.Pow(ratio * Pull(distance), 2) / 2;
+        foreach (Comb.Neighbour line in comb.Around(1).Skip(2)) // The sine's own images are fitted with it.
+            pull += line.Ratio * Pull(line.Distance) * Math.Cos(line.Phase);
+        double folded = comb.Folded(1).Sum(line => Math.Abs(line.Ratio * Pull(line.Distance)));
         return new FrequencyEstimate(Method, frequency,
             [
                 BudgetTerm.Normal("noise", Math.Sqrt(variance * fit.FrequencyVariance), degreesOfFreedom: degreesOfFreedom),
-                BudgetTerm.Rectangular("harmonics", Math.Sqrt(3 * pull) / count),
+                // The pull is known but left in, for the fit is what its name says: an error of that size.
+                BudgetTerm.Rectangular("harmonics", Math.Sqrt(3) * Math.Abs(pull) / count),
+                BudgetTerm.Rectangular("folding", folded / count),
             ],
             (int)(frequency * count));
     }
@@ -79,7 +82,7 @@ public sealed record SineFit(double Frequency, double Amplitude, double Phase, d
         return fit;
     }
 
-    // Largest error that a tone as strong as the sine, a distance away, gives the fitted frequency, both in cycles a record:
+    // Error that a tone as strong as the sine, a distance away and in phase with it at the middle, gives the fitted frequency, both in cycles a record:
     // 12/T³ ∫ t sin(2πdt/T) dt over the record, in turns.
     private static double Pull(double distance)
     {

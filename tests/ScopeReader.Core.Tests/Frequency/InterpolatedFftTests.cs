@@ -48,6 +48,28 @@ public class InterpolatedFftTests
     }
 
     [Fact]
+    public void Noise_as_strong_as_the_tone_makes_no_longer_period_of_it()
+    {
+        // 200 records of 2000 samples at -6.5 dB: a noise peak taken for a line between harmonics would show as a half to an eighth.
+        for (ulong seed = 1; seed <= 200; seed++)
+        {
+            double[] samples = Sine(2000, 1 / 20.3, 1, seed);
+            AddNoise(samples, 1.5, seed);
+            Assert.Equal(1 / 20.3, InterpolatedFft.Estimate(samples)!.CyclesPerSample, 1e-4);
+        }
+    }
+
+    [Fact]
+    public void Harmonics_that_fold_onto_the_tone_are_in_the_uncertainty()
+    {
+        // Period 50.0007 samples, edges of one sample: harmonics 49 and 51 fold within 0.15 cycles a record of the fundamental.
+        var wave = new SquareWave { Frequency = 1 / 50.0007, RiseTime = 1 };
+        double[] samples = new Recording { Interval = 1, Count = 10_000, Delay = 13.2, Noise = 0.001 }.Samples(wave.Signal);
+        foreach (FrequencyEstimate? estimate in new[] { InterpolatedFft.Estimate(samples), SineFit.Estimate(samples, 0.02) })
+            Assert.InRange(Math.Abs(estimate!.CyclesPerSample - wave.Frequency), 0, new Budget(estimate.Terms).ExpandedUncertainty);
+    }
+
+    [Fact]
     public void Three_cycles_are_too_few() => Assert.Null(InterpolatedFft.Estimate(Sine(300, 0.01, 1, 0)));
 
     [Fact]
