@@ -1,0 +1,25 @@
+using System.Globalization;
+using ScopeReader.Readings;
+
+namespace ScopeReader.Archive;
+
+/// <summary>Conditions as texts that read back to the same bits.</summary>
+public static class ConditionText
+{
+    /// <summary>"5 V", all digits, no prefix.</summary>
+    public static string Format(Condition condition)
+    {
+        ArgumentNullException.ThrowIfNull(condition);
+        return string.Create(CultureInfo.InvariantCulture, $"{condition.Value:R} {condition.Unit}").TrimEnd();
+    }
+
+    /// <summary>Reads <see cref="Format"/>'s text, or a person's.</summary>
+    /// <exception cref="FormatException">No number, or an unknown unit.</exception>
+    public static Condition Parse(string text)
+    {
+        ArgumentNullException.ThrowIfNull(text);
+        return Units.TryParse(text, out double value, out string unit)
+            ? new Condition(value, unit)
+            : throw new FormatException($"expected a number with its unit, such as 5 V, found \"{text}\"");
+    }
+}

@@ -1,0 +1,77 @@
+using System.Buffers.Text;
+using System.Runtime.InteropServices;
+
+namespace ScopeReader.Archive.Packing;
+
+/// <summary>A column's different texts, sorted by value, and which of them each row has.</summary>
+internal sealed class WordList
+{
+    // What a row may cost: more different texts than this and the list outweighs what it saves.
+    private const int RowsPerWord = 4, MostWords = 1 << 16, LongestWord = 16;
+
+    private WordList(byte[] text, int count, long[] indices) => (Text, Count, Indices) = (text, count, indices);
+
+    /// <summary>The texts, each ended by a line feed.</summary>
+    public byte[] Text { get; }
+
+    public int Count { get; }
+
+    /// <summary>Shape [rows].</summary>
+    public long[] Indices { get; }
+
+    /// <summary>Bits of an index.</summary>
+    public int Bits => BitsFor(Count);
+
+    public static int BitsFor(int count) => count <= 256 ? 8 : 16;
+
+    /// <summary>Makes the list; null where the texts are too many or too long.</summary>
+    public static WordList? TryMake(ReadOnlySpan<byte> block, TextTable table, int column)
+    {
+        int allowed = Math.Min(MostWords, 16 + table.Rows / RowsPerWord);
+        var numbers = new Dictionary<UInt128, int>();
+        var words = new List<byte[]>();
+        var indices = new long[table.Rows];
+        for (int row = 0; row < table.Rows; row++)
+        {
+            ReadOnlySpan<byte> field = block[table.Field(row, column)];
+            if (field.Length >= LongestWord)
+                return null;
+            ref int number = ref CollectionsMarshal.GetValueRefOrAddDefault(numbers, Key(field), out bool known);
+            if (!known)
+            {
+                if (words.Count == allowed)
+                    return null;
+                number = words.Count;
+                words.Add(field.ToArray());
+            }
+            indices[row] = number;
+        }
+
+        // By value, so that neighbours in voltage are neighbours in number, as the converter had them.
+        int[] order = [.. Enumerable.Range(0, words.Count).OrderBy(i => ValueOf(words[i])).ThenBy(i => i)];
+        var place = new int[order.Length];
+        var text = new PackWriter(words.Count * 10);
+        for (int i = 0; i < order.Length; i++)
+        {
+            place[order[i]] = i;
+            text.Bytes(words[order[i]]);
+            text.Byte((byte)'\n');
+        }
+        for (int row = 0; row < indices.Length; row++)
+            indices[row] = place[indices[row]];
+        return new WordList(text.ToArray(), words.Count, indices);
+    }
+
+    // Up to fifteen bytes and their number: no two fields share a key.
+    private static UInt128 Key(ReadOnlySpan<byte> field)
+    {
+        Span<byte> key = stackalloc byte[LongestWord];
+        key.Clear();
+        field.CopyTo(key);
+        key[^1] = (byte)field.Length;
+        return MemoryMarshal.Read<UInt128>(key);
+    }
+
+    private static double ValueOf(ReadOnlySpan<byte> word) =>
+        Utf8Parser.TryParse(word.TrimStart((byte)' '), out double value, out _) ? value : double.NegativeInfinity;
+}

@@ -1,0 +1,84 @@
+using System.Diagnostics;
+using ScopeReader.Archive;
+using ScopeReader.Archive.Packing;
+using ScopeReader.Archive.Search;
+
+namespace ScopeReader.ArchiveTrials;
+
+/// <summary>Times what a person waits for.</summary>
+internal static class Benchmark
+{
+    public static int Run(string path)
+    {
+        using (MeasurementArchive archive = MeasurementArchive.OpenToRead(path))
+        {
+            ArchiveStats stats = archive.Stats();
+            Console.WriteLine(FormattableString.Invariant($"{stats.Entries} entries, {stats.FileBytes / 1e6:F0} MB"));
+            Find(archive, "by subject", new ArchiveQuery { Subject = "if source, board 42" });
+            Find(archive, "by subject, *", new ArchiveQuery { Subject = "*board 7" });
+            Find(archive, "by serial, *", new ArchiveQuery { Serial = "S0420*" });
+            Find(archive, "by quantity range", new ArchiveQuery { Where = [Where("frequency-error > 99.1 ppm")] });
+            Find(archive, "by quantity and subject", new ArchiveQuery { Subject = "IF source, board 42", Where = [Where("|frequency-error| > 20 ppm")] });
+            Find(archive, "by two quantities", new ArchiveQuery { Where = [Where("frequency-error > 90 ppm"), Where("rise-time < 1.2 s")] });
+            Find(archive, "by text", new ArchiveQuery { Text = "board 042000*" });
+            Find(archive, "by day", new ArchiveQuery { Since = new DateTimeOffset(2022, 1, 1, 0, 0, 0, TimeSpan.Zero), Until = new DateTimeOffset(2022, 1, 10, 0, 0, 0, TimeSpan.Zero) });
+            Find(archive, "half of them all", new ArchiveQuery { Where = [Where("frequency-error > 0 ppm")] });
+        }
+        Add(path + ".added");
+        Pack();
+        return 0;
+    }
+
+    private static Comparison Where(string text) => Comparison.TryParse(text, out Comparison? comparison, out string problem) ? comparison! : throw new ArgumentException(problem);
+
+    private static void Find(MeasurementArchive archive, string what, ArchiveQuery query)
+    {
+        long matches = archive.Find(query).Matches;
+        var times = new double[9];
+        TimeSpan before = Environment.CpuUsage.TotalTime;
+        for (int i = 0; i < times.Length; i++)
+        {
+            var watch = Stopwatch.StartNew();
+            archive.Find(query);
+            times[i] = watch.Elapsed.TotalMilliseconds;
+        }
+        double busy = (Environment.CpuUsage.TotalTime - before).TotalMilliseconds / times.Length;
+        Array.Sort(times);
+        Console.WriteLine(FormattableString.Invariant($"find {what}: {matches} matches, first 100 in {times[4]:F1} ms (median of 9; {busy:F1} ms of processor each)"));
+    }
+
+    private static void Add(string path)
+    {
+        const int Count = 1000, Samples = 10_000, BatchSize = 50;
+        foreach (string file in (string[])[path, path + "-wal", path + "-shm"])
+            File.Delete(file);
+        NewEntry[] entries = [.. Enumerable.Range(0, Count).Select(s => MadeCapture.Entry(s, Samples))];
+        long bytes = entries.Sum(e => (long)e.Bytes.Length);
+        using (MeasurementArchive archive = MeasurementArchive.Open(path))
+        {
+            archive.Add(MadeCapture.Entry(-1, Samples));
+            TimeSpan before = Environment.CpuUsage.TotalTime;
+            var watch = Stopwatch.StartNew();
+            for (int i = 0; i < Count; i += BatchSize)
+                archive.Add(entries[i..(i + BatchSize)]);
+            double seconds = watch.Elapsed.TotalSeconds, busy = (Environment.CpuUsage.TotalTime - before).TotalSeconds;
+            Console.WriteLine(FormattableString.Invariant(
+                $"add {Count} measured captures of {Samples} samples ({bytes / 1e6:F0} MB), {BatchSize} a transaction: {seconds:F2} s ({busy:F2} s of processor), {Count / seconds:F0} a second, {new FileInfo(path).Length / 1e6:F1} MB"));
+        }
+        foreach (string file in (string[])[path, path + "-wal", path + "-shm"])
+            File.Delete(file);
+    }
+
+    private static void Pack()
+    {
+        (byte[] bytes, _) = MadeCapture.Text(1, 1_000_000);
+        CapturePacker.Pack(bytes);
+        var watch = Stopwatch.StartNew();
+        byte[] packed = CapturePacker.Pack(bytes);
+        double packing = watch.Elapsed.TotalMilliseconds;
+        watch.Restart();
+        bool same = CapturePacker.Unpack(packed).AsSpan().SequenceEqual(bytes);
+        Console.WriteLine(FormattableString.Invariant(
+            $"pack 1,000,000 samples of 8 bits: {bytes.Length} bytes to {packed.Length} ({100.0 * packed.Length / bytes.Length:F2} %) in {packing:F0} ms, back in {watch.Elapsed.TotalMilliseconds:F0} ms, the same bytes: {(same ? "yes" : "no")}"));
+    }
+}
