@@ -13,8 +13,8 @@ internal static class Awkward
     /// </summary>
     public static byte[] LoggerExport()
     {
-        const decimal start = -0.9e-3m, interval = 0.5e-6m;
-        const int count = 3_600;
+        const decimal start = -0.9e-3m, interval = 0.4e-6m;
+        const int count = 4_500;
         Recording recording = new()
         {
             Start = (double)start,
@@ -28,7 +28,7 @@ internal static class Awkward
         var sense = new HarmonicSine { Frequency = 20.06e3, Amplitude = 0.4, Offset = 0.75, Harmonics = [new(2, -14, 60), new(3, -19.5, 170)] };
         double[] volts = recording.Samples(gate.Signal), millivolts = (recording with { Seed = 92 }).Samples(sense.Build());
 
-        var text = new StringBuilder("Logger of bench 3\r\nSaved;14 March, 16:02\r\nRows;3600\r\nGain gate;1,000\r\nGain sense;0,050\r\nRemark;fan driver, second try\r\n\r\n");
+        var text = new StringBuilder("Logger of bench 3\r\nSaved;14 March, 16:02\r\nRows;4500\r\nGain gate;1,000\r\nGain sense;0,050\r\nRemark;fan driver, second try\r\n\r\n");
         text.Append("t;gate;sense\r\ns;V;mV\r\n");
         for (int i = 0; i < count; i++)
         {
