@@ -14,14 +14,14 @@ internal static class Table
         output.WriteLine($"{scenario.Name}: {scenario.Meaning}; {runs.Count} seeds");
         Line(output, $"{"quantity",-32} {"n",4} {"cover",7} {"u/spread",8} {"bias/spread",11} {"mean u",10} {"spread",10} {"mean truth",11}  remark");
         foreach (Tally t in Tallies(runs))
-            Line(output, $"{t.Name,-32} {t.Count,4} {t.Cover,7:P1} {t.MeanStated / t.Spread,8:F2} {t.Bias / t.Spread,11:F2} {t.MeanStated,10:G3} {t.Spread,10:G3} {Mean(runs, t.Name),11:G5}  {Remark(t)}");
+            Line(output, $"{t.Name,-32} {t.Count,4} {t.Cover,7:P1} {t.MeanStated / t.Spread,8:F2} {t.Bias / t.Spread,11:F2} {t.MeanStated,10:G3} {t.Spread,10:G3} {t.MeanTruth,11:G5}  {Remark(t)}");
 
         Count(output, "not measured", runs.SelectMany(r => r.Channel?.NotMeasured ?? []).Select(n => $"{n.Quantity} ({n.Code})"));
         Count(output, "measured without a truth", runs.Where(r => r.Case is not null)
-            .SelectMany(r => r.Channel!.Readings.Where(x => x.IsPrimary && !r.Case!.Truth.ContainsKey(x.Quantity.Id))).Select(x => x.Quantity.Id));
-        Count(output, "true but neither measured nor refused", runs.Where(r => r.Case is not null).SelectMany(r => r.Case!.Truth.Keys
+            .SelectMany(r => r.Channel!.Readings.Where(x => x.IsPrimary && r.Case!.TruthOf(x) is null)).Select(x => x.Quantity.Id));
+        Count(output, "true but neither measured nor refused", runs.Where(r => r.Case is not null).SelectMany(r => r.Case!.Truth.Keys.Where(k => !k.Contains('/'))
             .Except(r.Channel!.Readings.Select(x => x.Quantity.Id)).Except(r.Channel!.NotMeasured.Select(n => n.Quantity.Id))));
-        Count(output, "findings", runs.SelectMany(r => r.Channel?.Findings ?? []).Select(f => $"{f.Code}={f.Value}"));
+        Count(output, "findings", runs.SelectMany(r => r.Channel?.Findings ?? []).Select(f => f.Value is { Length: > 0 } value ? $"{f.Code}={value}" : f.Code));
         foreach (Run run in runs.Where(r => r.Failure is not null).Take(3))
             output.WriteLine("  threw: " + run.Failure);
         Count(output, "threw", runs.Where(r => r.Failure is not null).Select(_ => "seeds"));
@@ -46,7 +46,7 @@ internal static class Table
         foreach (Run run in runs)
             foreach (Reading reading in run.Channel?.Readings ?? [])
             {
-                if (!run.Case!.Truth.TryGetValue(reading.Quantity.Id, out double truth))
+                if (run.Case!.TruthOf(reading) is not { } truth)
                     continue;
                 if (reading.IsPrimary)
                     Of(reading.Quantity.Id).Add(reading, truth);
@@ -57,9 +57,6 @@ internal static class Table
 
         Tally Of(string name) => tallies.TryGetValue(name, out Tally? t) ? t : tallies[name] = new Tally(name);
     }
-
-    private static double Mean(IReadOnlyList<Run> runs, string name) =>
-        runs.Where(r => r.Case is not null).Select(r => r.Case!.Truth.GetValueOrDefault(name.Split('/')[0], double.NaN)).Average();
 
     private static string Remark(Tally t)
     {

@@ -6,13 +6,14 @@ namespace ScopeReader.Coverage;
 internal sealed class Tally(string name)
 {
     private readonly List<double> _errors = [];
-    private double _stated;
+    private double _stated, _truth;
     private int _covered, _bounded;
 
     public string Name { get; } = name;
     public int Count => _errors.Count;
     public double Cover => (double)_covered / Count;
     public double MeanStated => _stated / Count;
+    public double MeanTruth => _truth / Count;
     public double Bias => _errors.Average();
 
     /// <summary>True where most readings' variance is mostly one rectangle: their interval is to hold the truth, not to fit the spread.</summary>
@@ -31,6 +32,7 @@ internal sealed class Tally(string name)
     {
         double error = reading.Value - truth, variance = reading.Budget.StandardUncertainty * reading.Budget.StandardUncertainty;
         _errors.Add(error);
+        _truth += truth;
         _stated += reading.Budget.StandardUncertainty;
         if (Math.Abs(error) <= reading.Budget.ExpandedUncertainty)
             _covered++;

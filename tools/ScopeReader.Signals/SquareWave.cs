@@ -63,7 +63,10 @@ public sealed record SquareWave
     /// <summary>The wave, noise-free.</summary>
     public PeriodicSignal Signal => _signal.Value;
 
-    /// <summary>Every quantity of it, by identifier, in the quantity's base unit.</summary>
+    /// <summary>
+    /// Every quantity of it, by identifier, in the quantity's base unit; where methods rightly differ, also by
+    /// identifier/method.
+    /// </summary>
     /// <param name="settings">Reference levels and regions; null for the defaults.</param>
     public IReadOnlyDictionary<string, double> Truth(LevelSettings? settings = null) => SquareWaveTruth.Of(this, settings ?? LevelSettings.Default);
 

@@ -55,6 +55,8 @@ internal static class SquareWaveTruth
         Complex afterFall = (down - up * Complex.Exp(p * period * d)) / again;
         double atRise = 100 * afterRise.Magnitude * Math.Exp(p.Real * period * rise);
         double atFall = 100 * afterFall.Magnitude * Math.Exp(p.Real * period * (fall - d));
-        truth["ringing-amplitude"] = (atRise + atFall) / 2;
+        // Edges of different speed excite it differently: each fit has its own truth, and the rising edge's is the quantity's.
+        truth["ringing-amplitude"] = truth["ringing-amplitude/rising-edge-fit"] = atRise;
+        truth["ringing-amplitude/falling-edge-fit"] = atFall;
     }
 }
