@@ -11,11 +11,12 @@ namespace ScopeReader.Harmonics;
 /// <param name="Folded">Rms amplitude of what folds onto it from above half of the sample rate.</param>
 internal sealed record HarmonicLevel(int Order, double Fitted, double Noise, double DegreesOfFreedom, double Steps, double Folded)
 {
-    // Powers of noise are spread exponentially: one in a hundred is above ln 100 times their mean, which is twice the square of u.
-    private static readonly double FalseAlarm = Math.Sqrt(2 * Math.Log(100));
-
     /// <summary>The amplitude above which one in a hundred lines of noise alone lies.</summary>
-    public double Threshold => FalseAlarm * double.Hypot(Noise, Steps);
+    public double Threshold => ThresholdAmong(1);
+
+    /// <summary>The amplitude above which the strongest of several lines of noise alone lies once in a hundred records.</summary>
+    /// <remarks>Powers of noise are spread exponentially: one in a hundred is above ln 100 times their mean, which is twice the square of u.</remarks>
+    public double ThresholdAmong(int lines) => Math.Sqrt(2 * Math.Log(100.0 * lines)) * double.Hypot(Noise, Steps);
 
     public bool IsResolved => Fitted > Threshold;
 

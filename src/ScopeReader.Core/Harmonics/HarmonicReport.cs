@@ -21,6 +21,9 @@ internal sealed class HarmonicReport
 
     private HarmonicLevel Fundamental => _harmonics[0];
 
+    // Of nine harmonics of noise alone one passes its own threshold in nine records of a hundred: what is said of all of them asks for more.
+    private bool AnyStandsOut => _harmonics.Skip(1).Any(h => h.Fitted > h.ThresholdAmong(_seen - 1));
+
     public void Write()
     {
         WriteFundamental();
@@ -33,7 +36,7 @@ internal sealed class HarmonicReport
         foreach (Reading reading in written)
             _job.Sheet.Add(reading);
         WriteWorst(written);
-        WriteDistortion(written.Count > 0);
+        WriteDistortion();
         new HarmonicFindings(_job, _rollOff, written).Write();
     }
 
@@ -79,18 +82,18 @@ internal sealed class HarmonicReport
 
     private void WriteWorst(List<Reading> written)
     {
-        if (written.MaxBy(r => r.Value) is { } worst)
+        if (AnyStandsOut && written.MaxBy(r => r.Value) is { } worst)
             _job.Sheet.Add(new Reading(Quantities.WorstHarmonic, worst.Value, "dBc", worst.Budget, Method) { Count = _cycles, Note = $"{worst.Quantity.Id}, of harmonics 2 to {_seen}" });
         else if (_seen < 2)
             _job.Sheet.Refuse("above-nyquist", AboveNyquist(2), Quantities.WorstHarmonic);
         else
         {
-            double bound = Decibels.OfAmplitudes(_harmonics.Skip(1).Max(h => h.Threshold) / Fundamental.Amplitude);
-            _job.Sheet.Refuse("below-noise", Text($"< {bound:F1} dBc: none of harmonics 2 to {_seen} is resolved"), Quantities.WorstHarmonic);
+            double bound = Decibels.OfAmplitudes(_harmonics.Skip(1).Max(h => h.ThresholdAmong(_seen - 1)) / Fundamental.Amplitude);
+            _job.Sheet.Refuse("below-noise", Text($"< {bound:F1} dBc: noise alone shows as much in the strongest of harmonics 2 to {_seen}, in one record of a hundred; capture longer"), Quantities.WorstHarmonic);
         }
     }
 
-    private void WriteDistortion(bool anyResolved)
+    private void WriteDistortion()
     {
         if (_seen < _wanted)
         {
@@ -109,10 +112,10 @@ internal sealed class HarmonicReport
             most += h.Threshold * h.Threshold;
             degreesOfFreedom = Math.Min(degreesOfFreedom, h.DegreesOfFreedom);
         }
-        if (!anyResolved || power <= 0)
+        if (!AnyStandsOut || power <= 0)
         {
             double bound = 100 * Math.Sqrt(most) / Fundamental.Amplitude;
-            _job.Sheet.Refuse("below-noise", $"< {Engineering.Format(bound, "%", 2)}: none of harmonics 2 to {_wanted} is resolved", Quantities.Thd, Quantities.ThdR);
+            _job.Sheet.Refuse("below-noise", $"< {Engineering.Format(bound, "%", 2)}: none of harmonics 2 to {_wanted} stands out of the noise; capture longer", Quantities.Thd, Quantities.ThdR);
             return;
         }
         double decibels = Decibels.PerRelativeAmplitude / (2 * power), thd = Math.Sqrt(power) / Fundamental.Amplitude;
