@@ -1,3 +1,5 @@
+using System.Numerics;
+using System.Runtime.InteropServices;
 using ScopeReader.Captures;
 using ScopeReader.Files.Axes;
 using ScopeReader.Files.Meaning;
@@ -87,7 +89,7 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
     }
 
     /// <summary>Values in the base unit, multiplied by the chain's scale; levels in dB shift instead.</summary>
-    public void Scale(double[] values, string unit, double factor)
+    public void Scale(Span<double> values, string unit, double factor)
     {
         if (unit.StartsWith("dB", StringComparison.Ordinal))
         {
@@ -103,13 +105,17 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
     private static (double Minimum, double Maximum) Range(ReadOnlySpan<double> values)
     {
         double minimum = double.PositiveInfinity, maximum = double.NegativeInfinity;
-        foreach (double v in values)
+        ReadOnlySpan<Vector<double>> wide = MemoryMarshal.Cast<double, Vector<double>>(values);
+        if (wide.Length > 0)
         {
-            if (v < minimum)
-                minimum = v;
-            if (v > maximum)
-                maximum = v;
+            Vector<double> low = wide[0], high = wide[0];
+            foreach (Vector<double> v in wide)
+                (low, high) = (Vector.Min(low, v), Vector.Max(high, v));
+            for (int i = 0; i < Vector<double>.Count; i++)
+                (minimum, maximum) = (Math.Min(minimum, low[i]), Math.Max(maximum, high[i]));
         }
+        foreach (double v in values[(wide.Length * Vector<double>.Count)..])
+            (minimum, maximum) = (Math.Min(minimum, v), Math.Max(maximum, v));
         return (minimum, maximum);
     }
 }

@@ -71,10 +71,13 @@ public static class CaptureReader
             if (table.IsCut)
                 capture.Doubts.Add("the last line breaks off: it was left out");
         }
+        string hash = text.Finish();
+        if (text.IsCut)
+            capture.Doubts.Add("the compressed file breaks off: what could be unpacked of it was read");
         if (capture.Channels.Count == 0)
             throw new ImportException(file, FormattableString.Invariant($"expected a segment {settings.Segment}, found none of that number. Run inspect to see the segments."));
         return new CaptureFile(
-            new Capture(file, text.Finish(), capture.Channels, capture.Doubts),
+            new Capture(file, hash, capture.Channels, capture.Doubts),
             new ImportReport
             {
                 File = file,

@@ -20,7 +20,7 @@ internal sealed record SampleSource(int Index, int Axis, string Name, string Uni
         int values = table.Roles.Count(r => r == ColumnRole.Value), firstAxis = Array.FindIndex(table.Roles, r => r is ColumnRole.Time or ColumnRole.Frequency), axis = firstAxis;
         for (int i = 0; i < table.Roles.Length; i++)
         {
-            if (table.IsAxis(i))
+            if (table.Axes[i] is not null)
                 axis = i;
             if (table.Roles[i] != ColumnRole.Value)
                 continue;

@@ -19,7 +19,7 @@ internal static class SpectrumBuilder
     /// <exception cref="ImportException">The frequencies do not rise.</exception>
     public static void FromColumn(CaptureBuilder capture, Table table, SampleSource source)
     {
-        ReadOnlySpan<double> printed = table.Columns[source.Axis].Values, levels = table.Columns[source.Index].Values;
+        ReadOnlySpan<double> printed = table.Axes[source.Axis]!.Values(), levels = table.Samples[source.Index]!.Values[..printed.Length];
         Label label = table.Header.Labels[source.Axis];
         double factor = label.Factor;
         if (label.Unit is null or "")
@@ -40,7 +40,7 @@ internal static class SpectrumBuilder
     public static void FromPreamble(CaptureBuilder capture, Table table, SampleSource source)
     {
         (double start, double step) = Frequencies(table)!.Value;
-        double[] levels = table.Columns[source.Index].Values.ToArray(), frequencies = new double[levels.Length];
+        double[] levels = table.Samples[source.Index]!.Values.ToArray(), frequencies = new double[levels.Length];
         for (int i = 0; i < frequencies.Length; i++)
             frequencies[i] = start + i * step;
         capture.Note(new AxisReport(AxisSource.Preamble, "Hz", step, step, step, null));
@@ -57,38 +57,44 @@ internal static class SpectrumBuilder
             Array.Reverse(frequencies);
             Array.Reverse(levels);
         }
-        double half = table.Spacings[source.Axis].WidestHalf * factor;
-        Spacing? spacing = frequencies.AsSpan().ContainsAnyExceptInRange(double.NegativeInfinity, double.PositiveInfinity) || frequencies.Length < 2 ? null : Pieces.SpacingOf(frequencies, half);
-        for (int i = 1; i < frequencies.Length; i++)
-        {
-            if (!(frequencies[i] <= frequencies[i - 1]))
-                continue;
-            // Frequencies that are printed too coarsely to tell neighbours apart are even ones, or none at all.
-            if (spacing is not { Low: > 0 } even)
-                throw new ImportException(capture.File, $"expected frequencies that rise, found {Engineering.Format(frequencies[i], "Hz", 9)} after {Engineering.Format(frequencies[i - 1], "Hz", 9)}. Export one trace a file.", table.FirstLine + row + i, table.Shape.Columns[source.Axis] + 1);
-            capture.Doubts.Add($"{source.Name}: frequencies repeat by rounding; an even spacing of {Engineering.Format(even.Interval, "Hz", 6)} was fitted");
-            for (int k = 0; k < frequencies.Length; k++)
-                frequencies[k] = even.Start + k * even.Interval;
-            break;
-        }
-        capture.Note(new AxisReport(AxisSource.Column, "Hz", spacing?.Interval, spacing?.Low, spacing?.High, spacing?.WorstDeviation));
-        Add(capture, table, source, frequencies, levels, AxisSource.Column);
+        Add(capture, table, source, frequencies, levels, AxisSource.Column, row);
     }
 
-    private static void Add(CaptureBuilder capture, Table table, SampleSource source, double[] frequencies, double[] levels, AxisSource axis)
+    private static void Add(CaptureBuilder capture, Table table, SampleSource source, double[] frequencies, double[] levels, AxisSource axis, int row = 0)
     {
         int last = levels.AsSpan().LastIndexOfAnyExcept(double.NaN) + 1, kept = 0;
         for (int i = 0; i < last; i++)
             if (!double.IsNaN(levels[i]) && !double.IsNaN(frequencies[i]))
                 (frequencies[kept], levels[kept++]) = (frequencies[i], levels[i]);
         if (kept < FewestPoints)
-            throw new ImportException(capture.File, FormattableString.Invariant($"expected a spectrum trace of {FewestPoints} points or more in {source.Name}, found {kept}. Export the whole trace."), table.FirstLine);
+            throw new ImportException(capture.File, FormattableString.Invariant($"expected a spectrum trace of {FewestPoints} points or more in {source.Name}, found {kept}. Export the whole trace."), table.FirstLine + row);
         if (kept < last)
             capture.Doubts.Add(FormattableString.Invariant($"{source.Name}: {last - kept} of {last} points are missing or over range: left out"));
         (frequencies, levels) = (frequencies[..kept], levels[..kept]);
+        if (axis == AxisSource.Column)
+            Raise(capture, table, source, frequencies, isWhole: kept == last, row);
         capture.Scale(levels, source.Unit, source.Factor);
         double? resolution = table.Facts.Number(Fact.ResolutionBandwidth, "Hz") is { Value: > 0 } stated ? stated.Value : null;
         capture.Add(new SpectrumTrace(source.Name, source.Unit, frequencies, levels, resolution, axis, capture.NextSegment(source.Name)), last - kept);
+    }
+
+    // Frequencies that are printed too coarsely to tell neighbours apart are evenly spaced ones, or no axis at all.
+    private static void Raise(CaptureBuilder capture, Table table, SampleSource source, double[] frequencies, bool isWhole, int row)
+    {
+        double half = table.Axes[source.Axis]!.WidestHalf * table.Header.Labels[source.Axis].Factor;
+        Spacing? spacing = isWhole ? Pieces.SpacingOf(frequencies, half) : null;
+        int stuck = 1;
+        while (stuck < frequencies.Length && frequencies[stuck] > frequencies[stuck - 1])
+            stuck++;
+        if (stuck < frequencies.Length)
+        {
+            if (spacing is not { Low: > 0 } even)
+                throw new ImportException(capture.File, $"expected frequencies that rise, found {Engineering.Format(frequencies[stuck], "Hz", 9)} after {Engineering.Format(frequencies[stuck - 1], "Hz", 9)}. Export one trace a file.", table.FirstLine + row + stuck, table.Shape.Columns[source.Axis] + 1);
+            capture.Doubts.Add($"{source.Name}: frequencies repeat by rounding; an even spacing of {Engineering.Format(even.Interval, "Hz", 6)} was fitted");
+            for (int k = 0; k < frequencies.Length; k++)
+                frequencies[k] = even.Start + k * even.Interval;
+        }
+        capture.Note(new AxisReport(AxisSource.Column, "Hz", spacing?.Interval, spacing?.Low, spacing?.High, spacing?.WorstDeviation));
     }
 
     private static void NoteUnit(CaptureBuilder capture, Table table, ref double factor)

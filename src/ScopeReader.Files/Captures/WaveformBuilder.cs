@@ -10,32 +10,33 @@ internal static class WaveformBuilder
     /// <summary>Adds a waveform for each stretch.</summary>
     public static void Add(CaptureBuilder capture, Table table, SampleSource source, List<TimedPiece> pieces)
     {
-        ReadOnlySpan<double> values = table.Columns[source.Index].Values;
+        SampleColumn column = table.Samples[source.Index]!;
         int added = 0;
         foreach (TimedPiece piece in pieces)
-            if (AddPiece(capture, source, values.Slice(piece.First, piece.Length), piece))
+            if (AddPiece(capture, source, column.Memory.Slice(piece.First, piece.Length), column.Missing, piece))
                 added++;
         if (added == 0)
             throw new ImportException(capture.File, $"expected numbers in {source.Name}, found none. Leave the column out with \"skip\" in columns under [import].", table.FirstLine, table.Shape.Columns[source.Index] + 1);
     }
 
-    private static bool AddPiece(CaptureBuilder capture, SampleSource source, ReadOnlySpan<double> values, TimedPiece piece)
+    private static bool AddPiece(CaptureBuilder capture, SampleSource source, Memory<double> samples, int missingInColumn, TimedPiece piece)
     {
+        ReadOnlySpan<double> values = samples.Span;
         // A channel may be recorded over fewer rows than its neighbours.
         values = values[..(values.LastIndexOfAnyExcept(double.NaN) + 1)];
-        int missing = values.Count(double.NaN);
+        int missing = missingInColumn == 0 ? 0 : values.Count(double.NaN);
         (int start, int length) = missing == 0 ? (0, values.Length) : LongestWhole(values);
         if (length == 0)
             return false;
         int segment = capture.NextSegment(source.Name);
         if (missing > 0)
             capture.Doubts.Add(FormattableString.Invariant($"{source.Name}: {missing} of {values.Length} samples are missing or over range, the first is sample {values.IndexOf(double.NaN) + 1}; measured is the longest stretch without them, samples {start + 1} to {start + length}"));
-        double[] samples = values.Slice(start, length).ToArray();
-        capture.Scale(samples, source.Unit, source.Factor);
+        samples = samples.Slice(start, length);
+        capture.Scale(samples.Span, source.Unit, source.Factor);
         int before = start;
         if (piece.Falls)
         {
-            Array.Reverse(samples);
+            samples.Span.Reverse();
             before = piece.Length - start - length;
         }
         TimeAxis axis = piece.Axis;

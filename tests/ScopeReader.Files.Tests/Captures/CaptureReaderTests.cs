@@ -28,7 +28,7 @@ public class CaptureReaderTests
     [Fact]
     public void Names_and_prefixed_units_come_from_the_header()
     {
-        CaptureFile file = Import.Text("Time (us),Gate (mV),Drain current (mA)\n-1,500,2\n0,250,4\n1,125,8\n");
+        CaptureFile file = Import.Text("Time (us),Gate (mV),Drain current (mA)\n-1.000000,500,2\n0.000000,250,4\n1.000000,125,8\n");
 
         Assert.Equal(["Gate", "Drain current"], file.Capture.Channels.Select(c => c.Name));
         Assert.Equal(["V", "A"], file.Capture.Channels.Select(c => c.Unit));

@@ -1,3 +1,5 @@
+using System.Runtime.InteropServices;
+
 namespace ScopeReader.Files.Axes;
 
 /// <summary>Samples that look held at the edge of the instrument's range.</summary>
@@ -8,6 +10,12 @@ internal static class Clipping
     // A sine spends 29 % of its time within 5 % of the range from its peaks, a two-state waveform nearly all of it.
     private const double NearShare = 0.05, MostNear = 0.6;
 
+    // Of the step that follows; a peak that levels out leaves its top by far less, a two-state waveform by far more.
+    private const double LeastStep = 0.2, MostStep = 2;
+
+    // Enough samples to see how they are spread.
+    private const int Spread = 100_000;
+
     /// <summary>How many samples lie on an extreme value that they are held at: three or more in a row there, and more than
     /// twice as many as on the value next to it, while other values are spread out.</summary>
     /// <remarks>A two-state waveform without noise rests on its extremes without being clipped: so values in between must be
@@ -16,48 +24,52 @@ internal static class Clipping
     {
         if (samples.Length < 20 || minimum == maximum)
             return 0;
+        // Most captures are settled here: a free peak is a value or two.
+        if (CountOf(samples, maximum) < Run && CountOf(samples, minimum) < Run)
+            return 0;
         double band = NearShare * (maximum - minimum);
         int near = 0;
-        foreach (double v in samples)
-            if (v < minimum + band || v > maximum - band)
+        int stride = Math.Max(1, samples.Length / Spread), seen = 0;
+        for (int i = 0; i < samples.Length; i += stride, seen++)
+            if (samples[i] < minimum + band || samples[i] > maximum - band)
                 near++;
-        if (near > MostNear * samples.Length)
+        if (near > MostNear * seen)
             return 0;
         return CountAt(samples, maximum, 1) + CountAt(samples, minimum, -1);
     }
 
+    private static int CountOf(ReadOnlySpan<double> samples, double value) =>
+        MemoryMarshal.Cast<double, long>(samples).Count(BitConverter.DoubleToInt64Bits(value));
+
     private static int CountAt(ReadOnlySpan<double> samples, double extreme, int sign)
     {
-        int held = 0, run = 0, longest = 0, inner = 0;
-        double next = double.NegativeInfinity, steps = 0;
-        int corners = 0;
-        for (int i = 0; i < samples.Length; i++)
+        ReadOnlySpan<long> bits = MemoryMarshal.Cast<double, long>(samples);
+        long wanted = BitConverter.DoubleToInt64Bits(extreme);
+        int held = 0, longest = 0, corners = 0;
+        double steps = 0;
+        for (int at = 0, found; (found = bits[at..].IndexOf(wanted)) >= 0;)
         {
-            double v = sign * samples[i];
-            if (samples[i] == extreme)
-            {
-                held++;
-                run++;
-                longest = Math.Max(longest, run);
+            at += found;
+            int run = bits[at..].IndexOfAnyExcept(wanted);
+            run = run < 0 ? bits.Length - at : run;
+            (held, longest, at) = (held + run, Math.Max(longest, run), at + run);
+            if (run < Run || at + 1 >= samples.Length)
                 continue;
-            }
-            if (run >= Run && i + 1 < samples.Length)
-            {
-                // The slope on leaving the edge against the one after it: a clipped wave leaves it at full speed.
-                steps += (sign * extreme - v) / Math.Max(double.Epsilon, Math.Abs(v - sign * samples[i + 1]));
-                corners++;
-            }
-            run = 0;
-            inner++;
-            next = Math.Max(next, v);
+            // The step off the edge against the one after it: a clipped wave leaves the edge at full speed.
+            steps += sign * (extreme - samples[at]) / Math.Max(double.Epsilon, Math.Abs(samples[at] - samples[at + 1]));
+            corners++;
         }
-        if (longest < Run || held > samples.Length * 3 / 4 || inner == 0)
-            return 0;
-        int beside = 0;
+        bool isCutOff = corners > 0 && steps / corners is > LeastStep and < MostStep;
+        return longest >= Run && isCutOff && held > 2 * Beside(samples, extreme, sign) ? held : 0;
+    }
+
+    // How many samples lie on the value next to the extreme one.
+    private static int Beside(ReadOnlySpan<double> samples, double extreme, int sign)
+    {
+        double next = double.NegativeInfinity;
         foreach (double v in samples)
-            if (sign * v == next)
-                beside++;
-        bool isCutOff = corners > 0 && steps / corners is > 0.2 and < 2;
-        return held > 2 * beside && isCutOff ? held : 0;
+            if (v != extreme)
+                next = Math.Max(next, sign * v);
+        return CountOf(samples, sign * next);
     }
 }

@@ -39,6 +39,8 @@ internal sealed class HullPair
     // Keeps a chain that turns one way: clockwise seen from the left for the upper hull (turn 1).
     private static void Push(List<(double N, double T)> hull, double n, double t, int turn)
     {
+        if (hull.Count > 0 && hull[^1].N == n)
+            return; // The same point once more.
         while (hull.Count >= 2)
         {
             (double n1, double t1) = hull[^1];

@@ -12,26 +12,28 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
     // Printed times that leave an even spacing by more than this share of an interval are not one capture's.
     private const double Jitter = 0.1;
 
+    // An interval that is known to 10 ppm is better known than most timebases are.
+    private const double Fine = 10e-6;
+
     /// <summary>The stretches of evenly spaced rows under a column of times; -1 for none.</summary>
     /// <exception cref="ImportException">The times are not those of evenly spaced samples.</exception>
     public List<TimedPiece> Read(int column)
     {
         if (column < 0)
             return WithoutColumn();
-        ReadOnlySpan<double> times = table.Columns[column].Values;
-        times = times[..(times.LastIndexOfAnyExcept(double.NaN) + 1)];
-        (Label label, SpacingFit fit) = (table.Header.Labels[column], table.Spacings[column]);
+        (Label label, AxisColumn times) = (table.Header.Labels[column], table.Axes[column]!);
+        Spacing? fitted = times.Fit();
         double factor = FactorOf(label, column);
         if (capture.Settings.Interval is { } given)
-            return Given(given, fit, factor, times.Length);
-        if (times.Length < 2)
+            return Given(given, fitted, factor, times.Rows);
+        if (times.Rows < 2)
             throw new ImportException(capture.File, "expected times of two samples or more, found one. Export the whole capture.", table.FirstLine, ColumnNumber(column));
 
         var pieces = new List<TimedPiece>();
-        if (fit.Fit() is { } spacing)
-            pieces.Add(Timed(new Piece(0, times.Length, spacing), factor, column));
+        if (fitted is { } spacing)
+            pieces.Add(Timed(new Piece(0, times.Rows, spacing), factor, column));
         else
-            foreach (Piece piece in Cut(times, fit.WidestHalf, column))
+            foreach (Piece piece in Cut(times.Values(), times.WidestHalf, column))
                 pieces.Add(Timed(piece, factor, column));
         return pieces;
     }
@@ -78,9 +80,9 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
         return 1;
     }
 
-    private List<TimedPiece> Given(double interval, SpacingFit fit, double factor, int rows)
+    private List<TimedPiece> Given(double interval, Spacing? fitted, double factor, int rows)
     {
-        if (fit.Fit() is { } spacing && (interval < Scaled(spacing.Low, factor) * (1 - 1e-9) || interval > Scaled(spacing.High, factor) * (1 + 1e-9)))
+        if (fitted is { } spacing && (interval < Scaled(spacing.Low, factor) * (1 - 1e-9) || interval > Scaled(spacing.High, factor) * (1 + 1e-9)))
             Doubt($"the interval given, {Engineering.Format(interval, "s", 6)}, is not that of the times, {Engineering.Format(Scaled(spacing.Interval, factor), "s", 6)}; the one given is used");
         capture.Note(new AxisReport(AxisSource.Option, "s", interval, interval, interval, null));
         return [new TimedPiece(0, rows, new TimeAxis(0, interval, AxisSource.Option))];
@@ -158,12 +160,14 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
             // A last bit apart is not a disagreement; a stated interval is printed to as many digits as its maker meant.
             if (stated >= low * (1 - 1e-9) && stated <= high * (1 + 1e-9))
             {
-                if (high > low * (1 + 1e-9))
+                if (high - low > 2 * Fine * interval)
                     Doubt($"the times are rounded; the interval that the preamble states, {Engineering.Format(stated, "s", 6)}, lies in their range and is used");
                 return new TimedPiece(piece.First, piece.Length, new TimeAxis(start, stated, AxisSource.Column), falls);
             }
             Doubt(FormattableString.Invariant($"the preamble states an interval of {Engineering.Format(stated, "s", 6)}, the times say {Engineering.Format(interval, "s", 6)} ({(stated / interval - 1) * 1e6:G3} ppm off): the times are used"));
         }
+        if (high - low > 2 * Fine * interval)
+            Doubt(FormattableString.Invariant($"the times are printed too coarsely to know the interval better than ± {(high - low) / 2 / interval * 1e6:G2} ppm; --interval or --rate settles it"));
         return new TimedPiece(piece.First, piece.Length, new TimeAxis(start, interval, AxisSource.Column, low, high), falls);
     }
 
@@ -179,7 +183,7 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
     {
         if (factor == 1)
             return value;
-        double fitted = table.Spacings.Where(s => s.Count > 1).Select(s => Math.Abs(s.Fit()?.Interval ?? 0)).FirstOrDefault();
+        double fitted = table.Axes.Where(a => a is { Rows: > 1 }).Select(a => Math.Abs(a!.Fit()?.Interval ?? 0)).FirstOrDefault();
         return Math.Abs(value / fitted - 1) < 0.01 ? Scaled(value, factor) : value;
     }
 

@@ -11,6 +11,9 @@ internal sealed class Facts
     /// <param name="Unit">The base unit; null where none is written.</param>
     public readonly record struct Statement(string Text, double Value, string? Unit);
 
+    /// <summary>How many numbers are stated.</summary>
+    public int Numbers => _statements.Values.Count(s => double.IsFinite(s.Value) && s.Value != 0);
+
     /// <summary>A number that the preamble states in one of some units or without a unit; null where it doesn't.</summary>
     public Statement? Number(Fact fact, params ReadOnlySpan<string> units)
     {

@@ -32,7 +32,9 @@ internal static class Preamble
             if (row[c].Length == 0 || (data is not null && data.Contains(c)) || char.IsAsciiDigit(row[c][0]))
                 continue;
             Label label = Label.Read(row[c]);
-            if (FactWords.Of(label.Name) is { } fact)
+            if (Joined(row[c]) is { Value.Length: > 0 } parts && FactWords.Of(Label.Read(parts.Key).Name) is { } joined)
+                State(facts, joined, parts.Value, c + 1 < row.Length ? row[c + 1] : "", Label.Read(parts.Key), mark);
+            else if (FactWords.Of(label.Name) is { } fact)
             {
                 int value = c + 1;
                 while (value < row.Length && row[value].Length == 0 && (data is null || !data.Contains(value)))
@@ -40,8 +42,6 @@ internal static class Preamble
                 if (value < row.Length && (data is null || !data.Contains(value)))
                     State(facts, fact, row[value], value + 1 < row.Length ? row[value + 1] : "", label, mark);
             }
-            else if (Joined(row[c]) is { } parts && FactWords.Of(Label.Read(parts.Key).Name) is { } joined)
-                State(facts, joined, parts.Value, c + 1 < row.Length && parts.Value.Length > 0 ? row[c + 1] : "", Label.Read(parts.Key), mark);
         }
     }
 
@@ -62,6 +62,9 @@ internal static class Preamble
     private static void State(Facts facts, Fact fact, string text, string next, Label key, char mark)
     {
         text = text.Trim();
+        // "5.0E-7;s": the unit of a value may still be joined to it.
+        if (text.IndexOfAny([';', '\t']) is > 0 and int at)
+            (text, next) = (text[..at].Trim(), text[(at + 1)..].Trim());
         Cell cell = Cell.Read(text, mark);
         // A preamble may be printed with the other decimal mark than the data.
         if (cell.Kind != CellKind.Number)

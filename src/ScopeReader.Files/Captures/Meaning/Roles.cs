@@ -80,7 +80,7 @@ internal static class Roles
             return ColumnRole.Value;
         if (IsCount(x))
             return ColumnRole.Index;
-        bool decibels = labels[1].Unit is { } unit ? unit.StartsWith("dB", StringComparison.Ordinal) : First(shape, 1).All(v => v is < 40 and > -200) && First(shape, 1).Average() < -20;
+        bool decibels = labels[1].Unit is { } unit ? unit.StartsWith("dB", StringComparison.Ordinal) : First(shape, 1).DefaultIfEmpty(0).All(v => v is < 40 and > -200) && First(shape, 1).DefaultIfEmpty(0).Average() < -20;
         bool spectral = facts.Number(Fact.ResolutionBandwidth, "Hz") is not null || facts.Number(Fact.Stop, "Hz") is { Unit: not null } || facts.Number(Fact.Span, "Hz") is not null;
         if (spectral || (decibels && x[^1] >= LeastFrequency))
             return ColumnRole.Frequency;

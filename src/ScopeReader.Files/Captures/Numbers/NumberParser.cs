@@ -10,10 +10,23 @@ internal static class NumberParser
     /// <summary>The longest number that is read, in bytes.</summary>
     public const int LongestNumber = 1024;
 
-    private const int ExactPower = 22;
-    private const ulong ExactDigits = 1UL << 53;
+    /// <summary>The highest power of ten that is an exact double.</summary>
+    public const int ExactPower = 22;
 
-    private static readonly double[] s_powers = [1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19, 1e20, 1e21, 1e22];
+    /// <summary>Whole numbers up to this are exact doubles.</summary>
+    public const ulong ExactDigits = 1UL << 53;
+
+    /// <summary>Halves of last digits are tabled from 10^-this to 10^this.</summary>
+    public const int HalfRange = 40;
+
+    /// <summary>The powers of ten that are exact doubles.</summary>
+    public static readonly double[] Powers = [1e0, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9, 1e10, 1e11, 1e12, 1e13, 1e14, 1e15, 1e16, 1e17, 1e18, 1e19, 1e20, 1e21, 1e22];
+
+    /// <summary>Halves of last digits, from that of 10^-<see cref="HalfRange"/>.</summary>
+    public static readonly double[] Halves = [.. Enumerable.Range(-HalfRange, 2 * HalfRange + 1).Select(e => 0.5 * Math.Pow(10, e))];
+
+    /// <summary>Half of a last digit at a decimal exponent.</summary>
+    public static double HalfOf(int lastDigit) => 0.5 * Math.Pow(10, lastDigit);
 
     /// <summary>Reads a whole cell as a number.</summary>
     /// <param name="cell">UTF-8, without spaces round it.</param>
@@ -53,7 +66,7 @@ internal static class NumberParser
         if (digits > 19 || significand > ExactDigits || exponent is < -ExactPower or > ExactPower)
             return Slow(cell, mark, out value);
         double exact = significand;
-        exact = exponent < 0 ? exact / s_powers[-exponent] : exact * s_powers[exponent];
+        exact = exponent < 0 ? exact / Powers[-exponent] : exact * Powers[exponent];
         value = negative ? -exact : exact;
         return true;
     }
@@ -105,7 +118,8 @@ internal static class NumberParser
         return text.Length > 0;
     }
 
-    private static bool Slow(ReadOnlySpan<byte> cell, byte mark, out double value)
+    /// <summary>Reads a number of any length, digits and exponent already checked.</summary>
+    public static bool Slow(ReadOnlySpan<byte> cell, byte mark, out double value)
     {
         Span<byte> point = stackalloc byte[LongestNumber];
         cell.CopyTo(point);

@@ -9,10 +9,13 @@ namespace ScopeReader.Files.Rows;
 /// <summary>Reads the rows of a block of numbers, to its end or the file's.</summary>
 internal sealed class RowReader(TextWindow text, string file, Table table)
 {
+    private const int Patience = 100, FewLines = 8;
+
     private readonly TableShape _shape = table.Shape;
+    private readonly PlainRows? _plain = PlainRows.For(table);
     private readonly double[] _values = new double[table.Shape.Columns.Length], _halves = new double[table.Shape.Columns.Length];
     private Cell[] _cells = new Cell[16];
-    private int _count, _filled, _shortest = int.MaxValue, _longest;
+    private int _count, _filled, _lineLength;
     private bool _blankBefore;
 
     private enum Outcome
@@ -29,23 +32,65 @@ internal sealed class RowReader(TextWindow text, string file, Table table)
         do
         {
             cancellation.ThrowIfCancellationRequested();
-            ReadOnlySpan<byte> pending = text.Pending;
-            int done = 0;
-            long lines = 0;
-            bool ended = false;
-            for (int end; !ended && (end = pending[done..].IndexOf((byte)'\n')) >= 0;)
-            {
-                ended = ReadLine(pending.Slice(done, end), pending[(done + end + 1)..], text.Line + lines) == Outcome.End;
-                if (!ended)
-                    (done, lines) = (done + end + 1, lines + 1);
-            }
-            text.Consume(done, lines);
+            bool ended = ReadLines();
             if (ended)
                 return;
+            if (!text.Ended)
+                foreach (AxisColumn? axis in table.Axes)
+                    axis?.EndPart();
         }
         while (text.Fill());
         if (!text.Pending.IsEmpty && ReadLast(text.Pending) != Outcome.End)
             text.Consume(text.Pending.Length, 1);
+    }
+
+    // Reads the whole lines that are pending; true where the block ends among them.
+    private bool ReadLines()
+    {
+        ReadOnlySpan<byte> lines = text.Pending;
+        lines = lines[..(lines.LastIndexOf((byte)'\n') + 1)];
+        int done = 0, slow = 0;
+        long count = 0;
+        bool ended = false;
+        while (!ended && done < lines.Length)
+        {
+            // Where many rows in a row are not plain, trying each the quick way first would only cost time.
+            if (_plain is not null && slow < Patience)
+            {
+                done += _plain.Read(lines[done..], out int rows);
+                count += rows;
+                slow = rows > 0 ? 0 : slow + 1;
+                if (done == lines.Length)
+                    break;
+            }
+            ReadOnlySpan<byte> rest = lines[done..];
+            int end = rest.IndexOf((byte)'\n');
+            ended = ReadLine(rest[..end], rest[(end + 1)..], text.Line + count) == Outcome.End;
+            if (!ended)
+                (done, count) = (done + end + 1, count + 1);
+        }
+        if (!ended && lines.Length > 0)
+            _lineLength = CommonLength(lines);
+        text.Consume(done, count);
+        return ended;
+    }
+
+    // Length of the last few lines where it is the same, as in a table printed in fixed width; 0 elsewhere.
+    private static int CommonLength(ReadOnlySpan<byte> lines)
+    {
+        int common = 0;
+        for (int k = 0; k < FewLines; k++)
+        {
+            lines = lines[..^1];
+            int length = lines[(lines.LastIndexOf((byte)'\n') + 1)..].TrimEnd((byte)'\r').Length;
+            if (length == 0 || (common != 0 && length != common))
+                return 0;
+            common = length;
+            lines = lines[..(lines.LastIndexOf((byte)'\n') + 1)];
+            if (lines.IsEmpty)
+                return 0;
+        }
+        return common;
     }
 
     private Outcome ReadLine(ReadOnlySpan<byte> line, ReadOnlySpan<byte> following, long number)
@@ -59,11 +104,10 @@ internal sealed class RowReader(TextWindow text, string file, Table table)
         ReadOnlySpan<Cell> cells = _cells.AsSpan(0, _count);
         if (IsRow(cells, out Cell wrong, out int wrongAt))
         {
-            (_shortest, _longest) = (Math.Min(_shortest, line.Length), Math.Max(_longest, line.Length));
             AddRow();
             return Outcome.Row;
         }
-        if (line[line.IndexOfAnyExcept(" \t\""u8)] is (byte)'#' or (byte)'%' or (byte)'!')
+        if (line.TrimStart(" \t\""u8) is [(byte)'#' or (byte)'%' or (byte)'!', ..])
             return Outcome.Skipped;
         if (EndsBlock(cells, line, following))
             return Outcome.End;
@@ -76,8 +120,9 @@ internal sealed class RowReader(TextWindow text, string file, Table table)
         Take(line, text.Line);
         if (_filled == 0)
             return Outcome.Skipped;
-        bool isShort = _shortest == _longest && line.TrimEnd((byte)'\r').Length < _shortest - 1 && table.Rows > 2;
-        if (!isShort && IsRow(_cells.AsSpan(0, _count), out _, out _))
+        bool isShort = _lineLength > 0 && line.TrimEnd((byte)'\r').Length < _lineLength;
+        bool isOpen = _count > _filled && _filled <= _shape.Columns[^1];
+        if (!isShort && !isOpen && IsRow(_cells.AsSpan(0, _count), out _, out _))
         {
             AddRow();
             return Outcome.Row;
@@ -154,7 +199,7 @@ internal sealed class RowReader(TextWindow text, string file, Table table)
 
     private bool IsEndOfGroup(int i, int c)
     {
-        while (i > 0 && !table.IsAxis(i))
+        while (i > 0 && table.Axes[i] is null)
             i--;
         return i > 0 && _shape.Columns[i] >= _count;
     }
@@ -164,13 +209,12 @@ internal sealed class RowReader(TextWindow text, string file, Table table)
         if (_blankBefore && table.Rows > 0)
             table.Breaks.Add(table.Rows);
         _blankBefore = false;
-        int row = table.Rows;
         for (int i = 0; i < _values.Length; i++)
         {
-            table.Columns[i].Add(_values[i]);
-            if (table.IsAxis(i) && !double.IsNaN(_values[i]))
-                table.Spacings[i].Add(row, _values[i], _halves[i]);
+            table.Samples[i]?.Add(_values[i]);
+            table.Axes[i]?.Add(_values[i], _halves[i]);
         }
+        table.Rows++;
     }
 
     // Text ends a block; a row that only lost a cell or has a word in it does not, as long as the next line goes on as before.

@@ -8,7 +8,7 @@ namespace ScopeReader.Files.Rows;
 /// <summary>The blocks of numbers of a file, one after the other.</summary>
 internal sealed class TableSequence(TextWindow text, string file, ImportSettings settings)
 {
-    private const int Head = 1 << 16, LongestPreamble = 8 << 20, EnoughRows = 10, RepeatedPreamble = 200, MostShapes = 64;
+    private const int Head = 1 << 16, LongestPreamble = 8 << 20, EnoughRows = 10, RepeatedPreamble = 200, MostShapes = 64, SampleRows = 100;
 
     private Table? _previous;
     private int _shapes;
@@ -30,10 +30,20 @@ internal sealed class TableSequence(TextWindow text, string file, ImportSettings
             Ambiguity.Check(file, shape, settings, facts, startLine);
         else if (header.Rows == 0)
             header = header with { Labels = _previous.Header.Labels };
-        var table = new Table(shape, header, facts, Roles.Of(file, shape, header, facts, settings, startLine), startLine);
+        var table = new Table(shape, header, facts, Roles.Of(file, shape, header, facts, settings, startLine), startLine, ExpectedRows(shape));
         SkipLines(shape.First);
         new RowReader(text, file, table).Read(cancellation);
         return _previous = table;
+    }
+
+    // A little more than the file's size and the first rows' length make likely; later blocks of many share what is left.
+    private int ExpectedRows(TableShape shape)
+    {
+        if (_previous is not null)
+            return 0;
+        string[][] sample = [.. shape.Rows.Skip(shape.First).Take(SampleRows)];
+        double length = sample.Average(row => row.Sum(cell => cell.Length + 1.0));
+        return (int)Math.Min(text.Remaining / Math.Max(length, 2) * 1.05 + 16, int.MaxValue / 16);
     }
 
     // Blocks of one file are mostly built alike: the next row that fits the last block begins the next one.

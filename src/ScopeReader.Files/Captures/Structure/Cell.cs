@@ -11,8 +11,9 @@ namespace ScopeReader.Files.Structure;
 /// <param name="Unit">The base unit written in the cell; null where none is.</param>
 internal readonly record struct Cell(CellKind Kind, double Value, double Half, string? Unit)
 {
+    /// <summary>Values from here on stand for no number.</summary>
     // SCPI-99 7.2.1.4 and 7.2.1.5 (from memory): 9.9E37 is infinity and 9.91E37 is not a number.
-    private const double Infinity = 9.89e37;
+    public const double Infinity = 9.89e37;
 
     private static readonly string[] s_gaps = ["inf", "infinity", "1.#inf", "1.#qnan", "nan", "ol", "overload", "over", "ovld", "o.l", "o.l.", "ovfl", "overflow", "-", "--", "---", "----", "n/a", "na", "null", "\u221E", "*", "***", "****"];
 
@@ -27,7 +28,7 @@ internal readonly record struct Cell(CellKind Kind, double Value, double Half, s
         if (cell.IsEmpty)
             return s_empty;
         if (NumberParser.TryParse(cell, mark, out double value, out int lastDigit))
-            return Math.Abs(value) < Infinity ? new Cell(CellKind.Number, value, HalfOf(lastDigit), null) : s_gap;
+            return Math.Abs(value) < Infinity ? new Cell(CellKind.Number, value, NumberParser.HalfOf(lastDigit), null) : s_gap;
         if (cell.Length > NumberParser.LongestNumber)
             return s_text;
         if (IsDate(cell))
@@ -38,9 +39,9 @@ internal readonly record struct Cell(CellKind Kind, double Value, double Half, s
             if (cell.IndexOf((byte)':') > 0 && ClockTime.TryParse(cell, out double seconds, out double half))
                 return new Cell(CellKind.Number, seconds, half, "s");
             if (GroupedNumber.TryParse(cell, mark, out value, out lastDigit))
-                return new Cell(CellKind.Number, value, HalfOf(lastDigit), null);
+                return new Cell(CellKind.Number, value, NumberParser.HalfOf(lastDigit), null);
             if (NumberParser.TryParse(cell[..number], mark, out value, out lastDigit) && UnitWords.TryRead(Encoding.UTF8.GetString(cell[number..]), out double factor, out string unit))
-                return new Cell(CellKind.Number, UnitWords.Scale(value, factor), HalfOf(lastDigit) * factor, unit);
+                return new Cell(CellKind.Number, UnitWords.Scale(value, factor), NumberParser.HalfOf(lastDigit) * factor, unit);
         }
         return IsGap(cell) ? s_gap : s_text;
     }
@@ -56,8 +57,6 @@ internal readonly record struct Cell(CellKind Kind, double Value, double Half, s
             cell = cell[1..^1].Trim(" \t"u8);
         return cell;
     }
-
-    private static double HalfOf(int lastDigit) => 0.5 * Math.Pow(10, lastDigit);
 
     // A date in a cell of its own says nothing that the times beside it don't.
     private static bool IsDate(ReadOnlySpan<byte> cell)

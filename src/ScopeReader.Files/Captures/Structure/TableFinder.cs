@@ -7,7 +7,7 @@ namespace ScopeReader.Files.Structure;
 internal static class TableFinder
 {
     private const int UnitRows = 20, FewRows = 10;
-    private static readonly char[] s_delimiters = [',', ';', '\t', '|', RowSplitter.Spaces];
+    private static readonly char[] s_delimiters = [',', ';', '\t', '|', RowSplitter.Spaces], s_besideCommas = [';', '\t', '|', RowSplitter.Spaces, ','];
 
     /// <summary>The best reading of some lines as a table; null where they hold no numbers.</summary>
     /// <param name="lines">Whole lines of UTF-8.</param>
@@ -18,7 +18,7 @@ internal static class TableFinder
     {
         TableShape? best = null;
         double bestScore = 0;
-        foreach (char delimiter in settings.Delimiter is { } given ? [given] : s_delimiters)
+        foreach (char delimiter in settings.Delimiter is { } given ? [given] : settings.DecimalMark == ',' ? s_besideCommas : s_delimiters)
         {
             if (settings.Delimiter is null && best is not null && lines.Span.IndexOf((byte)delimiter) < 0)
                 continue;
@@ -27,12 +27,18 @@ internal static class TableFinder
             {
                 (TableShape? shape, double score) = Read(rows, delimiter, mark, firstLine);
                 // Of readings that explain the text equally well, the first tried is the usual one.
-                if (score > bestScore * 1.001)
+                if (score > bestScore * 1.001 || (score > bestScore * 0.999 && IsBetterExplained(shape!, best!)))
                     (best, bestScore) = (shape, score);
             }
         }
         return best;
     }
+
+    // A single column is read alike whatever separates columns; the preamble above it is not.
+    private static bool IsBetterExplained(TableShape shape, TableShape best) =>
+        shape.Width == 1 && best.Width == 1 && shape.First > 0 && Numbers(shape) > Numbers(best);
+
+    private static int Numbers(TableShape shape) => Preamble.Read(shape, Header.Read(shape)).Numbers;
 
     private static (TableShape? Shape, double Score) Read(List<string[]> rows, char delimiter, char mark, int from)
     {

@@ -4,12 +4,17 @@ namespace ScopeReader.Files.Text;
 internal sealed class TextWindow(Utf8Text text, string file)
 {
     /// <summary>The longest line that is read, in bytes; a longer one is no row of a table.</summary>
-    public const int LongestLine = 16 << 20;
+    public const int LongestLine = 1 << 20;
 
-    private const int Block = 1 << 20;
+    /// <summary>How many bytes behind what is pending may be looked at, whatever they are.</summary>
+    public const int Slack = 16;
 
-    private byte[] _buffer = new byte[Block + Block / 4];
+    // A short file needs little room; a long one is read in blocks that keep every core busy.
+    private const int FirstBlock = 1 << 17, Block = 4 << 20;
+
+    private byte[] _buffer = new byte[FirstBlock + Slack];
     private int _start, _end;
+    private bool? _hasLoneReturns;
 
     /// <summary>The text that is there, from the first byte nobody has consumed.</summary>
     public ReadOnlySpan<byte> Pending => _buffer.AsSpan(_start, _end - _start);
@@ -23,6 +28,9 @@ internal sealed class TextWindow(Utf8Text text, string file)
     /// <summary>True where nothing follows what is pending.</summary>
     public bool Ended { get; private set; }
 
+    /// <summary>How many bytes of text may follow what was read so far, as far as the file's size tells.</summary>
+    public long Remaining => Math.Max(0, text.ExpectedLength - text.Position) + _end - _start;
+
     /// <summary>Lets go of text.</summary>
     /// <param name="bytes">How much.</param>
     /// <param name="lines">How many lines end in it.</param>
@@ -32,7 +40,7 @@ internal sealed class TextWindow(Utf8Text text, string file)
         Line += lines;
     }
 
-    /// <summary>Adds a block of text behind what is pending; false where there is none left.</summary>
+    /// <summary>Adds text behind what is pending; false where there is none left.</summary>
     /// <exception cref="ImportException">What is pending is one line longer than any table's.</exception>
     public bool Fill()
     {
@@ -43,17 +51,26 @@ internal sealed class TextWindow(Utf8Text text, string file)
             Pending.CopyTo(_buffer);
             (_start, _end) = (0, _end - _start);
         }
-        if (_buffer.Length - _end < Block / 4)
-        {
-            if (_buffer.Length > LongestLine)
-                throw new ImportException(file, FormattableString.Invariant($"expected lines of at most {LongestLine >> 20} MB, found a longer one. Export the capture as CSV with one sample a line."), Line);
-            Array.Resize(ref _buffer, 2 * _buffer.Length);
-        }
-        int count = text.Read(_buffer.AsSpan(_end));
+        if (_end > LongestLine && Pending.IndexOf((byte)'\n') < 0)
+            throw new ImportException(file, FormattableString.Invariant($"expected lines of at most {LongestLine >> 20} MB, found a longer one. Export the capture as CSV with one sample of each channel a line."), Line);
+        int room = _buffer.Length - Slack - _end;
+        if (room < _buffer.Length / 2 && (_buffer.Length < Block || room < Block / 4))
+            Array.Resize(ref _buffer, Math.Max(2 * (_buffer.Length - Slack), 4 * FirstBlock) + Slack);
+        int count = text.ReadAtLeast(_buffer.AsSpan(_end, _buffer.Length - Slack - _end));
         Ended = count == 0;
-        LoneReturnsToLineFeeds(_buffer.AsSpan(Math.Max(_start, _end - 1), count + Math.Min(1, _end - _start)));
+        Span<byte> added = _buffer.AsSpan(Math.Max(_start, _end - 1), count + Math.Min(1, _end - _start));
+        if (_hasLoneReturns ??= HasLoneReturns(added))
+            LoneReturnsToLineFeeds(added);
         _end += count;
         return count > 0;
+    }
+
+    private static bool HasLoneReturns(ReadOnlySpan<byte> text)
+    {
+        for (int at; (at = text.IndexOf((byte)'\r')) >= 0 && at + 1 < text.Length; text = text[(at + 2)..])
+            if (text[at + 1] != '\n')
+                return true;
+        return text is [.., (byte)'\r'];
     }
 
     // Old exports end lines, or the header's lines, in a carriage return alone. One at the very end waits for what follows.

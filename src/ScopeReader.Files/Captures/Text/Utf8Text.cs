@@ -9,6 +9,12 @@ internal sealed class Utf8Text : IDisposable
     private const int SniffLength = 1 << 16;
     private const byte Gzip1 = 0x1F, Gzip2 = 0x8B;
 
+    // Printed samples pack to a tenth at best, a table of one value to a hundredth.
+    private const long MostExpansion = 200, LeastSuspect = 16 << 20;
+
+    private readonly bool _isCompressed, _isUtf8;
+    private readonly int _markLength;
+    private readonly string _file;
     private readonly HashingStream _hashing;
     private readonly Stream _text;
 
@@ -18,6 +24,7 @@ internal sealed class Utf8Text : IDisposable
     /// <exception cref="ImportException">Empty, binary, or an unknown encoding name.</exception>
     public Utf8Text(Stream stream, string file, string? encoding)
     {
+        long size = stream.CanSeek ? stream.Length : 0;
         _hashing = new HashingStream(stream);
         byte[] head = Sniff(_hashing);
         Stream bytes = new PrefixedStream(head, _hashing);
@@ -28,6 +35,8 @@ internal sealed class Utf8Text : IDisposable
             head = Sniff(bytes);
             bytes = new PrefixedStream(head, bytes);
             compressed = "gzip, ";
+            size = 0;
+            _isCompressed = true;
         }
         if (head.Length == 0)
             throw new ImportException(file, "expected a table of numbers, found an empty file. Save the capture again.");
@@ -36,16 +45,36 @@ internal sealed class Utf8Text : IDisposable
             ?? throw new ImportException(file, $"expected an encoding of utf-8, utf-16, utf-16be or latin-1, found \"{Excerpt.Of(encoding)}\". Correct encoding under [import].");
         if (!found.IsWide && IsBinary(head))
             throw new ImportException(file, "expected a table of numbers as text, found binary data. Export the capture as CSV.");
-        bytes.ReadExactly(new byte[found.MarkLength(head)]);
+        (_isUtf8, _markLength) = (found.Encoding is null, found.MarkLength(head));
+        bytes.ReadExactly(new byte[_markLength]);
         _text = found.Encoding is { } other ? Encoding.CreateTranscodingStream(bytes, other, Encoding.UTF8) : bytes;
+        ExpectedLength = found.IsWide ? size / 2 : size;
+        _file = file;
         EncodingName = compressed + found.Name;
     }
 
     /// <summary>How the text was encoded.</summary>
     public string EncodingName { get; }
 
-    /// <summary>Reads some text; 0 at its end.</summary>
-    public int Read(Span<byte> into) => _text.Read(into);
+    /// <summary>How long the text may be in UTF-8, as far as the file's size tells; 0 where it doesn't.</summary>
+    public long ExpectedLength { get; }
+
+    /// <summary>How much was read.</summary>
+    public long Position { get; private set; }
+
+    /// <summary>Fills a place with text; less only at its end.</summary>
+    /// <exception cref="ImportException">A compressed file unpacks to far more than any capture does.</exception>
+    public int ReadAtLeast(Span<byte> into)
+    {
+        int count = _text.ReadAtLeast(into, into.Length, throwOnEndOfStream: false);
+        Position += count;
+        if (_isCompressed && Position > LeastSuspect && Position > MostExpansion * _hashing.Count)
+            throw new ImportException(_file, FormattableString.Invariant($"expected a compressed file to unpack to at most {MostExpansion} times its size, found more. Unpack it and look at what it holds."));
+        return count;
+    }
+
+    /// <summary>True where a compressed file holds less than its own last word says (RFC 1952, 2.3.1: ISIZE).</summary>
+    public bool IsCut => _isCompressed && _hashing.LastWord is { } size && _isUtf8 && size != unchecked((uint)(Position + _markLength));
 
     /// <summary>SHA-256 of the file's bytes.</summary>
     public string Finish() => _hashing.Finish();
