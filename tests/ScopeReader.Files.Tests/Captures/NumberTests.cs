@@ -28,7 +28,7 @@ public class NumberTests
             CaptureFile read = Import.Text(file, s_timed with { DecimalMark = mark, Delimiter = ';', Columns = ["a", "b"] });
             double[] expected = [.. texts.Select(t => double.Parse(t, CultureInfo.InvariantCulture))];
             return Same(expected, read.Waveform(0).Samples) && Same(expected, read.Waveform(1).Samples);
-        }, iter: 200);
+        }, iter: 60);
 
     [Fact]
     public void Numbers_read_the_quick_way_are_the_same_bits_too() =>
@@ -37,7 +37,7 @@ public class NumberTests
             CaptureFile read = Import.Text("a,b\n" + string.Concat(texts.Select(t => $"{t},{t}\r\n")), s_timed with { Columns = ["a", "b"] });
             double[] expected = [.. texts.Select(t => double.Parse(t, CultureInfo.InvariantCulture))];
             return Same(expected, read.Waveform(0).Samples) && Same(expected, read.Waveform(1).Samples);
-        }, iter: 200);
+        }, iter: 60);
 
     [Theory]
     [InlineData("1.7976931348623157e308")]
@@ -59,7 +59,7 @@ public class NumberTests
     public void A_large_file_read_in_parts_is_the_same_as_its_rows_one_by_one()
     {
         // Long enough for several blocks over several cores, with rows in between that only the long way reads.
-        const int rows = 300_000;
+        const int rows = 150_000;
         var text = new StringBuilder("Time (s),U (V)\n");
         for (int i = 0; i < rows; i++)
             text.Append(CultureInfo.InvariantCulture, $"{i}e-6,{(i % 50_021 == 50_020 ? "\"0.5\"" : (i % 977).ToString(CultureInfo.InvariantCulture))}\n");

@@ -10,6 +10,7 @@ internal sealed unsafe class AxisColumn(bool keepsAll)
     private Spacing? _passed;
     private PrintedDigits? _digits;
     private double _widestHalf;
+    private readonly bool _keepsAll = keepsAll;
     private bool _keeps = keepsAll;
 
     /// <summary>How many rows were let go of.</summary>
@@ -87,7 +88,7 @@ internal sealed unsafe class AxisColumn(bool keepsAll)
             Rows = first + last + 1;
         if (halves.Length > 0)
             (_digits ??= new PrintedDigits(values, halves)).Correct(values, halves);
-        if (!keepsAll)
+        if (!_keepsAll)
             _fit.Add(first, values, halves);
         else
             foreach (double half in halves)

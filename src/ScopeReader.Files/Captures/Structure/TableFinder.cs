@@ -36,7 +36,7 @@ internal static class TableFinder
 
     // A single column is read alike whatever separates columns; the preamble above it is not.
     private static bool IsBetterExplained(TableShape shape, TableShape best) =>
-        shape.Width == 1 && best.Width == 1 && shape.First > 0 && Numbers(shape) > Numbers(best);
+        shape.Width == 1 && best.Width == 1 && shape.Delimiter != RowSplitter.Spaces && shape.First > 0 && Numbers(shape) > Numbers(best);
 
     private static int Numbers(TableShape shape) => Preamble.Read(shape, Header.Read(shape)).Numbers;
 
