@@ -167,7 +167,7 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
             Doubt(FormattableString.Invariant($"the preamble states an interval of {Engineering.Format(stated, "s", 6)}, the times say {Engineering.Format(interval, "s", 6)} ({(stated / interval - 1) * 1e6:G3} ppm off): the times are used"));
         }
         if (high - low > 2 * Fine * interval)
-            Doubt(FormattableString.Invariant($"the times are printed too coarsely to know the interval better than ± {(high - low) / 2 / interval * 1e6:G2} ppm; --interval or --rate settles it"));
+            Doubt(FormattableString.Invariant($"the times are printed too coarsely to know the interval better than ± {(high - low) / 2 / interval * 1e6:G3} ppm; --interval or --rate settles it"));
         return new TimedPiece(piece.First, piece.Length, new TimeAxis(start, interval, AxisSource.Column, low, high), falls);
     }
 
