@@ -7,7 +7,7 @@ namespace ScopeReader.Edges;
 /// <remarks>
 /// Regions after IEEE Std 181-2011 (clause not quoted): so many transition durations after the first instant inside the
 /// boundary of the state after the edge, and before the last instant inside that of the state before it. The boundaries are
-/// those of the settling band. An excursion below twice what noise, rounding and the state level would show by themselves
+/// those of the settling band. An excursion below twice what noise, rounding, the state level and the samples' distance would show by themselves
 /// is not resolved.
 /// </remarks>
 internal static class EdgeAberrations
@@ -33,23 +33,29 @@ internal static class EdgeAberrations
         else
         {
             double end = Math.Min(enters.Instant + region, times[^1]);
-            Report(job, edge, overshoot, Extremum.Find(edge.Edge, enters.Instant, end, highest: true, edge.Duration, 1), 1, note);
+            bool isCut = end < enters.Instant + region;
+            Report(job, edge, overshoot, Extremum.Find(edge.Edge, enters.Instant, end, highest: true, edge.Duration, 1), 1, isCut, note);
             Extremum? lowest = EdgeCrossing.Find(edge.Edge, 1, enters.Instant, forward: true, edge.Duration) is { } reaches && reaches.Instant < end
                 ? Extremum.Find(edge.Edge, reaches.Instant, end, highest: false, edge.Duration, 1)
                 : Extremum.Find(edge.Edge, end - edge.Duration, end, highest: false, edge.Duration, 1) is { } tail ? tail with { Value = 1 } : null;
-            Report(job, edge, undershoot, lowest, 1, note);
+            Report(job, edge, undershoot, lowest, 1, isCut, note);
         }
 
         if (!previousSettled)
             job.Sheet.Refuse("previous-edge", "the edge before has not settled yet where preshoot is looked for", preshoot);
         else if (EdgeCrossing.Find(edge.Edge, band, 0, forward: false, edge.Duration) is { } leaves && leaves.Instant - times[0] > edge.Duration)
-            Report(job, edge, preshoot, Extremum.Find(edge.Edge, Math.Max(leaves.Instant - region, times[0]), leaves.Instant, highest: false, edge.Duration, 0), 0, note);
+            Report(job, edge, preshoot, Extremum.Find(edge.Edge, Math.Max(leaves.Instant - region, times[0]), leaves.Instant, highest: false, edge.Duration, 0), 0, isCut: false, note);
         else
             job.Sheet.Refuse("edge-incomplete", "the record holds too little before the edge; move the trigger", preshoot);
     }
 
-    private static void Report(WaveformJob job, MeasuredEdge edge, Quantity quantity, Extremum? extremum, double state, string note)
+    private static void Report(WaveformJob job, MeasuredEdge edge, Quantity quantity, Extremum? extremum, double state, bool isCut, string note)
     {
+        if (isCut && extremum is { Slope: not 0 })
+        {
+            job.Sheet.Refuse("edge-incomplete", "the record or the next edge cuts the excursion off; take a longer record or a slower repetition", quantity);
+            return;
+        }
         if (extremum is null)
         {
             job.Sheet.Refuse("too-few-samples", "too few samples show the course of the wave there; sample faster", quantity);
@@ -59,11 +65,12 @@ internal static class EdgeAberrations
         bool isOvershoot = quantity == Quantities.RiseOvershoot || quantity == Quantities.FallOvershoot;
         double percent = 100 * (isOvershoot ? extremum.Value - state : state - extremum.Value);
         double byStates = 100 * edge.StateUncertainty(extremum.Value);
-        double floor = double.Hypot(100 * extremum.Floor, byStates);
+        // A kink bends a cubic into an excursion that is not there: its own curvature gives that away.
+        double floor = double.Hypot(double.Hypot(100 * extremum.Floor, byStates), 100 * extremum.Bend);
         if (percent < ResolvedOverFloor * floor || percent <= 0)
         {
             job.Sheet.Refuse("not-resolved", string.Create(CultureInfo.InvariantCulture,
-                $"no excursion above {Math.Max(ResolvedOverFloor * floor, 1e-4):0.####} % of amplitude, which is what this capture can tell from noise"), quantity);
+                $"no excursion above {Math.Max(ResolvedOverFloor * floor, 1e-4):0.####} % of amplitude, the least that this capture can show"), quantity);
             return;
         }
         BudgetTerm[] terms =

@@ -35,21 +35,10 @@ internal static class EdgeFindings
     /// <summary>Says that the edge's course is not simple.</summary>
     public static void Shape(WaveformJob job, MeasuredEdge edge)
     {
-        if (Ratio(edge) is not { } ratio || ratio is >= LowestRatio and <= HighestRatio)
+        if (edge.Between(10, 90) / edge.Between(20, 80) is not { } ratio || ratio is >= LowestRatio and <= HighestRatio)
             return;
         job.Sheet.Add(new Finding("edge-shape", string.Create(CultureInfo.InvariantCulture,
             $"the {(edge.Edge.IsRising ? "rising" : "falling")} edge takes {ratio:0.00} times as long from 10 to 90 % as from 20 to 80 %, where a plain edge takes 1.33 to 1.58 times: ")
             + "it has a step, a plateau or a long tail; look for a reflection or a second driver.", edge.Edge.IsRising ? "rise" : "fall"));
     }
-
-    /// <summary>10 to 90 % duration over 20 to 80 % duration; null where one of them does not show.</summary>
-    public static double? Ratio(MeasuredEdge edge)
-    {
-        if (!edge.IsResolved)
-            return null;
-        return Between(edge, 0.1, 0.9) / Between(edge, 0.2, 0.8);
-    }
-
-    private static double? Between(MeasuredEdge edge, double low, double high) =>
-        EdgeCrossing.Find(edge.Edge, high, 0, forward: true, edge.Duration)?.Instant - EdgeCrossing.Find(edge.Edge, low, 0, forward: false, edge.Duration)?.Instant;
 }

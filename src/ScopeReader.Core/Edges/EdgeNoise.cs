@@ -9,6 +9,8 @@ internal readonly record struct EdgeNoise(double Scatter, double CodeError)
 {
     private const int MostPlaces = 64, FewestPoints = 9, FewestRepeats = 200;
 
+    private const double StatesOverLocal = 0.8;
+
     /// <summary>Estimates both.</summary>
     /// <param name="times">Shape [points], samples.</param>
     /// <param name="values">Shape [points], of the step.</param>
@@ -20,7 +22,10 @@ internal readonly record struct EdgeNoise(double Scatter, double CodeError)
     public static EdgeNoise Of(ReadOnlySpan<double> times, ReadOnlySpan<double> values, ReadOnlySpan<double> counts, ReadOnlySpan<double> squares,
         double duration, double states, double step)
     {
-        double scatter = Math.Min(states, Repeats(times, counts, squares, duration) ?? Local(times, values, counts, duration) ?? states);
+        double scatter = Repeats(times, counts, squares, duration, step > 0) is { } repeats ? Math.Min(states, repeats) : states;
+        // The local estimate rests on few samples: it counts where the states show clearly more, which is then no noise.
+        if (scatter == states && Local(times, values, counts, duration) is { } local && local < StatesOverLocal * states)
+            scatter = local;
         if (step == 0)
             return new EdgeNoise(scatter, 0);
         // Variance of rounded samples of noise s about a value anywhere between codes, in steps: s/√π while s is small (a code
@@ -30,11 +35,19 @@ internal readonly record struct EdgeNoise(double Scatter, double CodeError)
         return new EdgeNoise(scatter, step / Math.Sqrt(12) * Math.Exp(-2 * Math.PI * Math.PI * noise * noise));
     }
 
-    // Samples that share a cell, from the later half of the points: early ringing moves within a cell.
-    private static double? Repeats(ReadOnlySpan<double> times, ReadOnlySpan<double> counts, ReadOnlySpan<double> squares, double duration)
+    // Samples that share a cell, from the last quarter of the points, where ringing no longer moves within a cell. A state that
+    // lies on the boundary of two codes flips at the least noise, so of two states the one that scatters less counts.
+    private static double? Repeats(ReadOnlySpan<double> times, ReadOnlySpan<double> counts, ReadOnlySpan<double> squares, double duration, bool isCoded)
     {
-        double sum = 0, freedom = 0, from = Math.Max(2 * duration, times[^1] / 2);
-        for (int i = times.Length - 1; i >= 0 && times[i] > from; i--)
+        int late = IndexAt(times, Math.Max(2 * duration, 0.75 * times[^1])), early = IndexAt(times, -2 * duration);
+        double? after = Pooled(counts[late..], squares[late..]), before = Pooled(counts[..early], squares[..early]);
+        return isCoded && before < after ? before : after;
+    }
+
+    private static double? Pooled(ReadOnlySpan<double> counts, ReadOnlySpan<double> squares)
+    {
+        double sum = 0, freedom = 0;
+        for (int i = 0; i < counts.Length; i++)
         {
             if (counts[i] < 2)
                 continue;

@@ -39,7 +39,7 @@ internal static class EdgeResolver
                 : new EdgeProblem("too-few-samples", $"fewer than 3 samples lie on the edge, which takes at most {describe(bound)}; sample faster");
             double middle = edge.Times[last] + bound / 2;
             // The 50 % instant is somewhere between the two points.
-            return new MeasuredEdge(edge.Shifted(middle), bound, bound / 2 / Math.Sqrt(3), null, null, 0, before, after);
+            return new MeasuredEdge(edge.Shifted(middle), bound, new EdgeInstant(bound / 2 / Math.Sqrt(3), 1 / bound), null, null, 0, before, after);
         }
 
         var at50 = EdgeCrossing.Find(edge, 0.5, edge.Times[last], forward: true, bound);
@@ -52,7 +52,7 @@ internal static class EdgeResolver
         }
         problem = null;
         double duration = atHigh.Instant - atLow.Instant, sigma = duration / (BoundedNormal.NormalQuantile(high) - BoundedNormal.NormalQuantile(low));
-        return new MeasuredEdge(edge.Shifted(at50.Instant), duration, double.Hypot(at50.Noise, at50.Rounding),
+        return new MeasuredEdge(edge.Shifted(at50.Instant), duration, new EdgeInstant(double.Hypot(at50.Noise, at50.Rounding), at50.Slope),
             atLow.From(at50.Instant), atHigh.From(at50.Instant),
             atLow.Interpolation(edge, sigma) + atHigh.Interpolation(edge, sigma), before, after);
     }

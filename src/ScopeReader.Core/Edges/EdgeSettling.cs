@@ -10,7 +10,7 @@ namespace ScopeReader.Edges;
 /// </remarks>
 internal static class EdgeSettling
 {
-    private const double Window = 0.3;
+    private const double Window = 0.2;
 
     /// <summary>Writes the reading, or why there is none, down.</summary>
     /// <returns>The settling duration in samples; null where the edge was not seen to settle.</returns>
@@ -50,8 +50,10 @@ internal static class EdgeSettling
         BudgetTerm[] terms = jumps
             ? [BudgetTerm.Rectangular("band", jump * toTime)]
             : [
-                BudgetTerm.Normal("noise", double.Hypot(noise / slope, edge.MiddleUncertainty) * toTime),
-                BudgetTerm.Normal(rising ? "high-level" : "low-level", edge.AfterUncertainty, toTime / slope),
+                BudgetTerm.Normal("noise", double.Hypot(noise / slope, edge.Middle.Noise) * toTime),
+                // The state after the edge moves the band and the 50 % instant, the one before it the instant alone.
+                BudgetTerm.Normal(rising ? "high-level" : "low-level", edge.AfterUncertainty, (1 / settled.Slope + 0.5 / edge.Middle.Slope) * toTime),
+                BudgetTerm.Normal(rising ? "low-level" : "high-level", edge.BeforeUncertainty, 0.5 / edge.Middle.Slope * toTime),
             ];
         job.Sheet.Add(new Reading(quantity, value, job.Waveform.Axis.TimeUnit, job.Chain.ForTime(value, EdgeTimes.Present(terms)), "averaged-edge")
         {

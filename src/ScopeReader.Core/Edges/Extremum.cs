@@ -10,8 +10,10 @@ namespace ScopeReader.Edges;
 /// <param name="Floor">What noise alone would show as an excursion: σ √(2 ln m) for m independent places.</param>
 internal sealed record Extremum(double Time, double Value, double Noise, double Rounding, double Bend, double Slope, double Floor)
 {
-    /// <summary>Half-width of the window, of the transition duration.</summary>
-    private const double Window = 0.2;
+    // Half-widths of the window, of the transition duration. A wider one is better while what it bends is small beside noise.
+    private static readonly double[] Windows = [0.2, 0.3, 0.42, 0.6];
+
+    private const double BendOverNoise = 0.2;
 
     /// <summary>Looks for it.</summary>
     /// <param name="edge">The averaged edge.</param>
@@ -23,15 +25,34 @@ internal sealed record Extremum(double Time, double Value, double Noise, double 
     /// <returns>Null where the points hold no curve in the region.</returns>
     public static Extremum? Find(AveragedEdge edge, double from, double to, bool highest, double duration, double level)
     {
-        double narrow = Window * duration, widest = Math.Max(0.6 * duration, 3), sign = highest ? 1 : -1;
+        Extremum? found = null;
+        foreach (double window in Windows)
+        {
+            if (Find(edge, from, to, highest, window * duration, Math.Max(window * duration, Math.Max(0.6 * duration, 3)), level) is not { } next)
+                continue;
+            if (found is not null && next.Bend > BendOverNoise * next.Noise)
+                break;
+            found = next;
+        }
+        return found;
+    }
+
+    private static Extremum? Find(AveragedEdge edge, double from, double to, bool highest, double narrow, double widest, double level)
+    {
+        double sign = highest ? 1 : -1;
         LocalCurve? best = null;
+        double highestScore = double.NegativeInfinity;
         // Half a window apart no top is missed; both ends count.
         int steps = Math.Max(1, (int)Math.Ceiling((to - from) / (narrow / 2)));
         for (int i = 0; i <= steps; i++)
         {
             var curve = LocalCurve.About(edge, from + i * (to - from) / steps, narrow, widest);
-            if (curve is not null && (best is null || sign * curve.Value > sign * best.Value))
-                best = curve;
+            if (curve is null)
+                continue;
+            // Where a kink bends the cubic the excursion is not real: what the bend may be is taken off before comparing.
+            double score = sign * (curve.Value - level) - 2 * BendOf(curve, level);
+            if (score > highestScore)
+                (best, highestScore) = (curve, score);
         }
         if (best is null)
             return null;
@@ -42,12 +63,16 @@ internal sealed record Extremum(double Time, double Value, double Noise, double 
                 break;
             best = next;
         }
-        // A cubic misses 3/35 of the fourth-order term at its centre; for a cosine that term is (y'')² over its amplitude.
-        double excursion = Math.Max(Math.Abs(best.Value - level), double.Epsilon), h2 = best.HalfWidth * best.HalfWidth;
-        double bend = 3.0 / 35 / 24 * h2 * h2 * best.Curvature * best.Curvature / excursion;
         bool atEnd = best.Centre <= from || best.Centre >= to;
         double places = Math.Max(2, (to - from) / (2 * best.HalfWidth) + 1);
         double floor = double.Hypot(best.Noise, best.Rounding) * Math.Sqrt(2 * Math.Log(places));
-        return new Extremum(best.Centre, best.Value, best.Noise, best.Rounding, bend, atEnd ? best.Slope : 0, floor);
+        return new Extremum(best.Centre, best.Value, best.Noise, best.Rounding, BendOf(best, level), atEnd ? best.Slope : 0, floor);
+    }
+
+    // A cubic misses 3/35 of the fourth-order term at its centre; for a cosine that term is (y'')² over its amplitude.
+    private static double BendOf(LocalCurve curve, double level)
+    {
+        double excursion = Math.Max(Math.Abs(curve.Value - level), double.Epsilon), h2 = curve.HalfWidth * curve.HalfWidth;
+        return Math.Min(1, 3.0 / 35 / 24 * h2 * h2 * curve.Curvature * curve.Curvature / excursion);
     }
 }

@@ -3,10 +3,10 @@ namespace ScopeReader.Edges;
 /// <summary>An averaged edge, and what the readings and the ringing fit need to know of it; times in samples from its 50 % instant.</summary>
 public sealed class MeasuredEdge
 {
-    internal MeasuredEdge(AveragedEdge edge, double duration, double middleUncertainty, EdgeCrossing? low, EdgeCrossing? high,
+    internal MeasuredEdge(AveragedEdge edge, double duration, EdgeInstant middle, EdgeCrossing? low, EdgeCrossing? high,
         double interpolation, double beforeUncertainty, double afterUncertainty)
     {
-        (Edge, MiddleUncertainty, Low, High, Interpolation) = (edge, middleUncertainty, low, high, interpolation);
+        (Edge, Middle, Low, High, Interpolation) = (edge, middle, low, high, interpolation);
         (BeforeUncertainty, AfterUncertainty) = (beforeUncertainty, afterUncertainty);
         // Edges laid over each other that are not quite in place broaden it as a Gaussian filter would: variances add.
         double smear = GaussianEdge.DurationOverSigma * edge.Smear;
@@ -23,14 +23,26 @@ public sealed class MeasuredEdge
     /// <summary>True where the samples show the edge's course between the reference levels.</summary>
     public bool IsResolved => Low is not null;
 
+    /// <summary>Time from one level to another, each passed where it is nearest to the 50 % instant.</summary>
+    /// <param name="lowPercent">% of the step, below 50.</param>
+    /// <param name="highPercent">% of the step, above 50.</param>
+    /// <returns>Samples; null where the edge's points do not show it.</returns>
+    public double? Between(double lowPercent, double highPercent)
+    {
+        if (!IsResolved)
+            return null;
+        return EdgeCrossing.Find(Edge, highPercent / 100, 0, forward: true, Duration)?.Instant
+            - EdgeCrossing.Find(Edge, lowPercent / 100, 0, forward: false, Duration)?.Instant;
+    }
+
     /// <summary>What was taken off the duration for edges laid over each other imperfectly, samples.</summary>
     internal double Broadening { get; }
 
     /// <summary>Bound on the error that the gaps between the points leave in the duration, samples.</summary>
     internal double Interpolation { get; }
 
-    /// <summary>Standard uncertainty of the 50 % instant, samples.</summary>
-    internal double MiddleUncertainty { get; }
+    /// <summary>How well the 50 % instant is known.</summary>
+    internal EdgeInstant Middle { get; }
 
     /// <summary>The lower reference level's crossing.</summary>
     internal EdgeCrossing? Low { get; }

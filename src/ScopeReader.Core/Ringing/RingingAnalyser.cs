@@ -62,8 +62,10 @@ public static class RingingAnalyser
         Add(Quantities.RingingAmplitude, 100 * amplitude, "%", new Budget([
             .. Own(ur, ringing.AmplitudeShift, 100),
             .. EdgeTimes.Present(
-                BudgetTerm.Normal("states", double.Hypot(edge.BeforeUncertainty, edge.AfterUncertainty), 100 * amplitude),
-                BudgetTerm.Normal("50 % instant", edge.MiddleUncertainty, 100 * amplitude * decay)),
+                // Each state moves the step that the amplitude is a share of, and the instant that it is carried back to.
+                BudgetTerm.Normal(edge.Edge.IsRising ? "high-level" : "low-level", edge.AfterUncertainty, 100 * amplitude * (1 + decay / 2 / edge.Middle.Slope)),
+                BudgetTerm.Normal(edge.Edge.IsRising ? "low-level" : "high-level", edge.BeforeUncertainty, 100 * amplitude * (1 - decay / 2 / edge.Middle.Slope)),
+                BudgetTerm.Normal("50 % instant", edge.Middle.Noise, 100 * amplitude * decay)),
         ]));
 
         IEnumerable<BudgetTerm> Own(double u, double shift, double sensitivity) => EdgeTimes.Present(
