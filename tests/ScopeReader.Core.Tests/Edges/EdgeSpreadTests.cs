@@ -7,7 +7,7 @@ namespace ScopeReader.Tests.Edges;
 /// <summary>Stated uncertainties of edges and ringing against the spread of repeated noisy captures.</summary>
 public class EdgeSpreadTests
 {
-    private const int Seeds = 60;
+    private const int Seeds = 40;
 
     private static readonly Quantity[] Tried =
     [
@@ -37,8 +37,8 @@ public class EdgeSpreadTests
                 stated[i] += reading.Budget.StandardUncertainty / Seeds;
             }
         }
-        // The rms of 60 errors is known to 1/√120 = 9 %: the project's 0.8 to 1.3, widened by two of those.
+        // The rms of 40 errors is known to 1/√80 = 11 %: the 0.8 to 1.3 that every budget is held to, widened by two of those.
         for (int i = 0; i < Tried.Length; i++)
-            Assert.True(stated[i] / Math.Sqrt(squares[i]) is > 0.65 and < 1.55, $"{Tried[i]}: {stated[i] / Math.Sqrt(squares[i]):F2}");
+            Assert.True(stated[i] / Math.Sqrt(squares[i]) is > 0.62 and < 1.6, $"{Tried[i]}: {stated[i] / Math.Sqrt(squares[i]):F2}");
     }
 }
