@@ -6,11 +6,11 @@ namespace ScopeReader.Edges;
 /// <summary>Settling duration of an averaged edge: from the 50 % instant to the last entry into a band about the new state.</summary>
 /// <remarks>
 /// IEEE Std 181-2011 (term; clause not quoted). Where a swing just touches the band, a slightly wider band would be entered
-/// a swing earlier: the value at bands moved by 2.5 times the uncertainty of the level tells, and that difference is then a term.
+/// a swing earlier: the value at bands moved by 3.5 times the uncertainty of the level tells, and that difference is then a term.
 /// </remarks>
 internal static class EdgeSettling
 {
-    private const double Window = 0.2, Doubts = 2.5;
+    private const double Window = 0.2, Doubts = 3.5;
 
     /// <summary>Writes the reading, or why there is none, down.</summary>
     /// <returns>The settling duration in samples; null where the edge was not seen to settle.</returns>
@@ -44,9 +44,9 @@ internal static class EdgeSettling
 
         double toTime = job.Waveform.Interval * job.Chain.TimeFactor, value = settled.Time * toTime, slope = Math.Abs(settled.Slope);
         double wider = Settled(edge, band + Doubts * doubt)?.Time ?? settled.Time, tighter = Settled(edge, Math.Max(band / 10, band - Doubts * doubt))?.Time ?? end;
-        double jump = Math.Max(tighter - settled.Time, settled.Time - wider);
-        // Twice what the slope explains is no longer the slope: a whole swing comes or goes.
-        bool jumps = jump > 2 * Doubts * doubt / slope + 0.05 * duration;
+        double later = Math.Max(0, tighter - settled.Time), earlier = Math.Max(0, settled.Time - wider), jump = Math.Max(later, earlier);
+        // Along a slope a band moved in or out moves the entry alike and little; a whole swing takes longer than the edge.
+        bool jumps = jump > 3 * Math.Min(later, earlier) + 0.05 * duration || jump > duration;
         BudgetTerm[] terms = jumps
             ? [BudgetTerm.Rectangular("band", jump * toTime)]
             : [
