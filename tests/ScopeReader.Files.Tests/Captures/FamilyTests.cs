@@ -82,10 +82,12 @@ public class FamilyTests
         Assert.Contains("2 of 20 samples are missing", Assert.Single(file.Capture.Doubts), StringComparison.Ordinal);
     }
 
-    [Fact]
-    public void C_start_and_step_in_spare_columns_of_the_header()
+    [Theory]
+    [InlineData("N,A,B,T0,Step,\nCount,Volt,Volt,-2.0e-4,5.0e-7\n")]
+    [InlineData("X,A,B,Start,Increment,\nSequence,Volt,Volt,-2.0e-4,5.0e-7\n")]
+    public void C_start_and_step_in_spare_columns_of_the_header(string header)
     {
-        CaptureFile file = Import.Text("N,A,B,T0,Step,\nCount,Volt,Volt,-2.0e-4,5.0e-7\n" + Rows(20, i => $"{i},{F(0.12 * i)},3.30,"));
+        CaptureFile file = Import.Text(header + Rows(20, i => $"{i},{F(0.12 * i)},3.30,"));
 
         Assert.Equal(["A", "B"], file.Capture.Channels.Select(c => c.Name));
         Assert.Equal((-2e-4, 5e-7, AxisSource.Preamble), (file.Waveform().Axis.Start, file.Waveform().Interval, file.Waveform().Axis.Source));

@@ -6,7 +6,7 @@ internal static class TradeWords
     private static readonly string[] s_time = ["time", "zeit", "temps", "tiempo", "tempo", "czas", "时间", "時間", "时刻", "時刻"];
     private static readonly string[] s_frequency = ["frequency", "freq", "frequenz", "fréquence", "frecuencia", "frequenza", "frequência", "częstotliwość", "频率", "頻率", "周波数"];
     private static readonly string[] s_index =
-        ["index", "n", "no", "no.", "nr", "nr.", "#", "point", "points", "sample", "samples", "count", "number", "x", "row", "punkt", "punkte", "abtastwert", "muestra", "échantillon", "campione", "amostra", "próbka", "序号", "点", "番号"];
+        ["index", "n", "no", "no.", "nr", "nr.", "#", "point", "points", "sample", "samples", "count", "number", "sequence", "x", "row", "punkt", "punkte", "abtastwert", "muestra", "échantillon", "campione", "amostra", "próbka", "序号", "点", "番号"];
 
     /// <summary>True where a column's name says that it holds times.</summary>
     public static bool IsTime(string name) => name is "T" || HasLetter(name, 't') || Mentions(name, s_time);
