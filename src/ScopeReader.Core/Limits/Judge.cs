@@ -44,9 +44,9 @@ public static class Judge
     {
         ArgumentNullException.ThrowIfNull(limit);
         ArgumentNullException.ThrowIfNull(reading);
-        if (reading.Quantity.Unit != "V" && reading.Quantity.Unit != reading.Unit)
+        if (reading.Quantity.Unit != reading.Unit && !IsUnstated(reading))
             return new Verdict(limit, VerdictOutcome.NotMeasured, reading, null,
-                $"the limit is in {reading.Quantity.Unit} and the reading in {reading.Unit}: state the sample interval with --interval or --rate");
+                $"the limit is in {reading.Quantity.Unit} and the reading in {reading.Unit}" + (reading.Unit.Contains("sample", StringComparison.Ordinal) ? ": state the sample interval with --interval or --rate" : ""));
 
         Budget budget = reading.Budget;
         double value = reading.Value, low = limit.Low ?? double.NegativeInfinity, high = limit.High ?? double.PositiveInfinity;
@@ -67,6 +67,9 @@ public static class Judge
             return new Verdict(limit, VerdictOutcome.Fail, reading, probability, "beyond the limit by more than the guard band");
         return new Verdict(limit, VerdictOutcome.Undecided, reading, probability, WhatWouldDecide(budget, value, low, high, limit.Guard, guard));
     }
+
+    // A channel of a file without units is taken in the limit's.
+    private static bool IsUnstated(Reading reading) => reading is { Quantity.Unit: "V", Unit: "" } or { Quantity.Unit: "V/s", Unit: "/s" };
 
     private static string Unstated(Budget budget) =>
         "not stated in the plan: " + string.Join(", ", budget.Missing.Select(name => $"{name} (add {PlanKeys.For(name)} to [chain])"));

@@ -21,6 +21,18 @@ public static class Engineering
         return Join(Fixed(scaled, digits - 1 - Magnitude(scaled, digits)), Prefix(power), unit);
     }
 
+    /// <summary>A value that is given and not measured, without zeros that say nothing: "455 kHz".</summary>
+    /// <param name="value">In <paramref name="unit"/>.</param>
+    /// <param name="unit">A unit without prefix.</param>
+    /// <param name="digits">Significant digits at most, 1 to 15.</param>
+    public static string Given(double value, string unit, int digits = 10)
+    {
+        string text = Format(value, unit, digits);
+        int space = text.IndexOf(' ');
+        (string number, string rest) = space < 0 ? (text, "") : (text[..space], text[space..]);
+        return (number.Contains('.') ? number.TrimEnd('0').TrimEnd('.') : number) + rest;
+    }
+
     /// <summary>A value and its expanded uncertainty, two digits of it, in one unit: "38.20 MHz ± 0.40 MHz".</summary>
     /// <param name="value">In <paramref name="unit"/>.</param>
     /// <param name="uncertainty">0 or more; 0 gives the value alone.</param>

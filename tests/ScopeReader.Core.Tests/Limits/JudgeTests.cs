@@ -91,4 +91,25 @@ public class JudgeTests
     public void A_wider_guard_band_takes_more_proof() =>
         // 17 + 2 × 1.96 = 20.92 > 20.
         Assert.Equal(VerdictOutcome.Undecided, Judge.Reading(Within(20, guard: 2), Ppm(17, 1)).Outcome);
+
+    [Theory]
+    [InlineData("A", VerdictOutcome.NotMeasured, "the limit is in V and the reading in A")]
+    [InlineData("", VerdictOutcome.Pass, "inside the limit by the guard band or more")]
+    public void A_limit_in_volts_does_not_judge_amperes(string unit, VerdictOutcome expected, string reason)
+    {
+        var reading = new Reading(Quantities.HighLevel, 1, unit, new Budget([BudgetTerm.Normal("noise", 0.01)]), "shorth");
+        Verdict verdict = Judge.Reading(new Limit(Quantities.HighLevel, null, 2), reading);
+
+        Assert.Equal(expected, verdict.Outcome);
+        Assert.Equal(reason, verdict.Reason);
+    }
+
+    [Fact]
+    public void A_frequency_per_sample_is_not_judged_in_hertz()
+    {
+        var reading = new Reading(Quantities.Frequency, 0.01, "1/sample", new Budget([BudgetTerm.Normal("noise", 1e-6)]), "crossings");
+
+        Assert.Equal("the limit is in Hz and the reading in 1/sample: state the sample interval with --interval or --rate",
+            Judge.Reading(new Limit(Quantities.Frequency, 1, null), reading).Reason);
+    }
 }

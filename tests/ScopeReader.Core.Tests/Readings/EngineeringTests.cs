@@ -29,4 +29,13 @@ public class EngineeringTests
     [InlineData(5, "1", 2, "5.0")]
     public void A_value_alone_has_the_digits_asked_for(double value, string unit, int digits, string expected) =>
         Assert.Equal(expected, Engineering.Format(value, unit, digits));
+
+    [Theory]
+    [InlineData(455e3, "Hz", "455 kHz")]
+    [InlineData(503.5e3, "Hz", "503.5 kHz")]
+    [InlineData(0, "V", "0 V")]
+    [InlineData(-50, "ppm", "-50 ppm")]
+    [InlineData(1e-8, "s", "10 ns")]
+    public void A_given_value_has_no_idle_zeros(double value, string unit, string expected) =>
+        Assert.Equal(expected, Engineering.Given(value, unit));
 }

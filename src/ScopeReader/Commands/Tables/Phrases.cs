@@ -116,13 +116,7 @@ internal static class Phrases
         quantity.Id.StartsWith(HarmonicPrefix, StringComparison.Ordinal) && int.TryParse(quantity.Id[HarmonicPrefix.Length..], CultureInfo.InvariantCulture, out int number) ? number : 0;
 
     /// <summary>A number that is given and not measured: so many digits at most, and no zeros that say nothing.</summary>
-    public static string Number(double value, string unit, int digits)
-    {
-        string text = Engineering.Format(value, SafeText.Of(unit), digits);
-        int space = text.IndexOf(' ');
-        (string number, string rest) = space < 0 ? (text, "") : (text[..space], text[space..]);
-        return Sheet.Joined((number.Contains('.') ? number.TrimEnd('0').TrimEnd('.') : number) + rest);
-    }
+    public static string Number(double value, string unit, int digits) => Sheet.Joined(Engineering.Given(value, SafeText.Of(unit), digits));
 
     private static string Range(string low, string high)
     {
