@@ -1,3 +1,5 @@
+using ScopeReader.Readings;
+
 namespace ScopeReader.Program.Tests;
 
 public class ReadmeTests
@@ -18,5 +20,15 @@ public class ReadmeTests
 
         Assert.Equal(0, status);
         Assert.Equal(string.Join('\n', lines[(opened + 1)..closed]), string.Join('\n', output.TrimEnd().Split('\n').Select(line => line.TrimEnd())));
+    }
+
+    [Fact]
+    public async Task The_table_of_quantities_is_the_programs_own()
+    {
+        string readme = await File.ReadAllTextAsync(Path.Combine(BuiltProgram.Root, "README.md"));
+
+        // Harmonics stand in one row for all.
+        foreach (Quantity quantity in Quantities.All.Where(q => !q.Id.StartsWith("harmonic-", StringComparison.Ordinal)))
+            Assert.Contains($"| `{quantity.Id}` | {quantity.Unit} | {quantity.Meaning} | {quantity.Source} |", readme, StringComparison.Ordinal);
     }
 }
