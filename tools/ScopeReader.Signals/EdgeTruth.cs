@@ -95,6 +95,9 @@ internal sealed class EdgeTruth
     {
         double n = _wave.Signal.Table.Length, a = i / n, b = (i + 1) / n;
         bool below = At(a) < level;
+        // A level that is met at a table point: the closed form may have it on the other side of its own rounding.
+        if (At(b) < level == below)
+            return Math.Abs(At(a) - level) < Math.Abs(At(b) - level) ? a : b;
         for (int k = 0; k < 45; k++)
         {
             double middle = (a + b) / 2;
