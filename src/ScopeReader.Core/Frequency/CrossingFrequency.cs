@@ -15,8 +15,13 @@ public sealed record CrossingFrequency
     /// <summary>The method's name as readings have it.</summary>
     public const string Method = "crossings";
 
+    /// <summary>Name of the term that bounds errors of interpolation.</summary>
+    internal const string InterpolationTerm = "interpolation";
+
     // Fewer degrees of freedom than this say less about the timing noise than the noise on the states does.
     private const int FewestDegreesOfFreedom = 5;
+    // An edge of any shorter duration looks like one of up to 1.6 samples, by the lines between them.
+    private const double Resolved = 1.8;
     private const double SineWindow = 0.11, EdgeWindow = 0.4, LargestSpread = 0.1;
 
     private CrossingFrequency() { }
@@ -38,6 +43,18 @@ public sealed record CrossingFrequency
     /// places, 0 where they spread.
     /// </summary>
     public required int CommensurateMultiple { get; init; }
+
+    /// <summary>Slope of the rising edges at the mid level, per sample; 0 where it could not be read.</summary>
+    public required double RisingSlope { get; init; }
+
+    /// <summary>Slope of the falling edges there, without its sign.</summary>
+    public required double FallingSlope { get; init; }
+
+    /// <summary>Standard uncertainty of a mean width for noise and jitter, samples.</summary>
+    public required double WidthNoise { get; init; }
+
+    /// <summary>Bound of the interpolation error of one direction's mean instant, samples, where it does not average.</summary>
+    public required double WidthBound { get; init; }
 
     /// <summary>Edges that were left out as strays.</summary>
     public required int Outliers { get; init; }
@@ -67,7 +84,7 @@ public sealed record CrossingFrequency
 
         double slope = 0.8 * (high - low) / Math.Max(duration, 0.8);
         double expected = instants.NoiseFactor * Math.Sqrt(noise * noise + shape.Step * shape.Step / 12) / slope;
-        double bound = EdgeInterpolation.LargestError(duration > 1 ? duration : 0);
+        double bound = EdgeInterpolation.LargestError(duration > Resolved ? duration : 0);
         // The states' noise hides the steps of the converter from 0.3 step on.
         if (noise < 0.3 * shape.Step)
             bound = Math.Min(0.5, bound + shape.Step / 2 / slope);
@@ -81,24 +98,35 @@ public sealed record CrossingFrequency
         int multiple = EdgeInterpolation.CommensurateMultiple(fit.Period, samples.Length / fit.Period);
         double relative = multiple == 0 ? 0 : EdgeInterpolation.RelativeBound(bound / OfHarmonic(duration, multiple), samples.Length);
         if (multiple != 0)
-            terms.Add(BudgetTerm.Rectangular("interpolation", relative * fit.Period, frequency * frequency));
+            terms.Add(BudgetTerm.Rectangular(InterpolationTerm, relative * fit.Period, frequency * frequency));
 
         double spread = fit.DegreesOfFreedom >= FewestDegreesOfFreedom ? fit.Spread : Math.Max(expected, fit.Spread);
+        FoldedEdge.Crossing? rising = Fold(samples, fit, fit.RisingOrigin, true, low, high, duration, multiple), falling = Fold(samples, fit, fit.FallingOrigin, false, low, high, duration, multiple);
+        (int Rising, int Falling) edges = (instants.Rising.Length, instants.Falling.Length);
+        // What the edges scatter beyond noise is jitter, and averages with the edges only.
+        double jitter = Math.Max(0, spread * spread - expected * expected) * (1.0 / Math.Max(1, edges.Rising) + 1.0 / Math.Max(1, edges.Falling));
+        double ur = rising?.Uncertainty ?? expected, uf = falling?.Uncertainty ?? expected;
         return new CrossingFrequency
         {
             Estimate = new FrequencyEstimate(Method, frequency, terms, fit.Edges),
-            Grid = new PeriodGrid(fit.Period, fit.PeriodUncertainty, fit.RisingOrigin, fit.FallingOrigin, spread),
+            Grid = new PeriodGrid(fit.Period, fit.PeriodUncertainty, fit.RisingOrigin + (rising?.Offset ?? 0), fit.FallingOrigin + (falling?.Offset ?? 0), spread),
             EdgeDuration = duration,
             InterpolationBound = bound,
             CommensurateMultiple = multiple,
+            RisingSlope = rising?.Slope ?? slope,
+            FallingSlope = falling?.Slope ?? slope,
+            WidthNoise = Math.Sqrt(ur * ur + uf * uf + jitter),
+            WidthBound = multiple == 0 ? 0 : bound / OfHarmonic(duration, multiple),
             Outliers = fit.Outliers,
-            Edges = (instants.Rising.Length, instants.Falling.Length),
+            Edges = edges,
         };
     }
 
-    // Harmonics of the interpolation error over the place between samples: 1/m³ for its cubic form, 1/m for edges shorter
-    // than a sample.
-    private static double OfHarmonic(double duration, int multiple) => Math.Pow(multiple, duration > 1 ? 3 : 1);
+    private static FoldedEdge.Crossing? Fold(ReadOnlySpan<double> samples, EdgeRegression fit, double? origin, bool isRising, double low, double high, double duration, int places) =>
+        origin is { } instant ? FoldedEdge.Find(samples, instant, fit.Period, isRising, (low + high) / 2, high - low, duration, places) : null;
+
+    // Harmonics of the interpolation error over the place between samples: 1/m³ for its cubic form, 1/m for unresolved edges.
+    private static double OfHarmonic(double duration, int multiple) => Math.Pow(multiple, duration > Resolved ? 3 : 1);
 
     private static double RoughPeriod(IReadOnlyList<Transition> transitions)
     {

@@ -281,7 +281,14 @@ public sealed class EdgeRegression
         ratio /= WanderBlocks - 2;
         if (ratio <= WanderLimit)
             return;
-        PeriodUncertainty *= Math.Sqrt(ratio);
+        // Steps from block mean to block mean are independent for white frequency noise, the least that wander can be.
+        double cycles = (double)Edges / WanderBlocks / (_instants.Count(t => t.Length > 0)), squares = 0;
+        for (int b = 1; b < WanderBlocks; b++)
+        {
+            double step = (sums[b] / counts[b] - sums[b - 1] / counts[b - 1]) / cycles;
+            squares += step * step;
+        }
+        PeriodUncertainty = Math.Max(PeriodUncertainty, Math.Sqrt(squares / (WanderBlocks - 2) / (WanderBlocks - 1)));
         DegreesOfFreedom = WanderBlocks - 2;
     }
 }

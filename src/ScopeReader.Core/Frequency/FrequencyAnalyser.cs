@@ -6,9 +6,17 @@ using ScopeReader.Readings;
 namespace ScopeReader.Frequency;
 
 /// <summary>Frequency by every method that suits the wave, period, and the deviation from nominal.</summary>
+/// <remarks>
+/// Primary is the method that uses most of what the wave carries: a sine fit on a sine, the edges elsewhere. The others
+/// stand beside it for comparison.
+/// </remarks>
 public static class FrequencyAnalyser
 {
     private const double Million = 1e6;
+
+    // Edges under this many samples a cycle are not told from their alias; a fallback line must agree with half the edges.
+    private const double FewestSamplesPerCycle = 4;
+    private const int FewestEdgesForLine = 8;
 
     /// <summary>Measures the frequency and writes it down, or why not.</summary>
     /// <param name="job">The waveform and where readings go.</param>
@@ -20,34 +28,65 @@ public static class FrequencyAnalyser
     {
         ArgumentNullException.ThrowIfNull(job);
         ArgumentNullException.ThrowIfNull(shape);
-        if (crossings is null)
+        ReadOnlySpan<double> samples = job.Waveform.Samples;
+        FrequencyEstimate? line = edges >= 3 ? InterpolatedFft.Estimate(samples) : null;
+        FrequencyEstimate? sine = null;
+        if (shape.Kind == WaveKind.Sinusoidal && (line ?? crossings?.Estimate) is { } start)
+            sine = SineFit.Estimate(samples, start.CyclesPerSample);
+        if (sine is { CyclesPerSample: > 1 / FewestSamplesPerCycle })
+            crossings = null;
+
+        (FrequencyEstimate? primary, string why) = Choose(shape, crossings?.Estimate, line, sine, edges);
+        if (primary is null)
         {
             (string code, string reason) = WhyNot(shape, edges);
             job.Sheet.Refuse(code, reason, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError);
             return null;
         }
-
-        FrequencyEstimate primary = crossings.Estimate;
-        AddFrequency(job, primary, isPrimary: true, Why(shape));
+        Add(job, primary, isPrimary: true, why);
+        foreach (FrequencyEstimate? other in (ReadOnlySpan<FrequencyEstimate?>)[crossings?.Estimate, line, sine])
+            if (other is not null && other != primary)
+            {
+                Add(job, other, isPrimary: false, "for comparison");
+                FrequencyFindings.Compare(job, primary, other);
+            }
         AddPeriod(job, primary);
         AddError(job, primary);
-        return new MeasuredFrequency(primary, crossings.Grid);
+        FrequencyFindings.Record(job, primary, crossings);
+        return new MeasuredFrequency(primary, crossings?.Grid);
     }
 
-    private static string Why(WaveShape shape) => shape.Kind == WaveKind.TwoState
-        ? "primary: on a two-state wave the edges carry the timing"
-        : "primary: the wave is no single sine, and its crossings repeat";
+    private static (FrequencyEstimate? Primary, string Why) Choose(WaveShape shape, FrequencyEstimate? crossings, FrequencyEstimate? line, FrequencyEstimate? sine, int edges)
+    {
+        if (sine is not null)
+            return (sine, "primary: on a sine the fit uses every sample");
+        if (crossings is not null)
+            return (crossings, shape.Kind switch
+            {
+                WaveKind.TwoState => "primary: on a two-state wave the edges carry the timing; a sine fit would leave its harmonics out",
+                WaveKind.Sinusoidal => "primary: the sine fit did not settle on this record",
+                _ => "primary: the wave is no single sine, and its crossings repeat",
+            });
+        bool agrees = line is not null && edges >= FewestEdgesForLine && edges > line.Count && edges < 4 * line.Count;
+        return agrees ? (line, "primary: the edges keep no steady period, so the strongest line stands in") : (null, "");
+    }
 
-    private static (double Value, Budget Budget) OnChain(WaveformJob job, FrequencyEstimate estimate)
+    /// <summary>An estimate with the chain's correction and terms.</summary>
+    internal static (double Value, Budget Budget) OnChain(WaveformJob job, FrequencyEstimate estimate)
     {
         double perSample = job.Chain.FrequencyFactor / job.Waveform.Interval, value = estimate.CyclesPerSample * perSample;
         return (value, job.Chain.ForTime(value, estimate.Terms.Select(t => t.Times(perSample))));
     }
 
-    private static void AddFrequency(WaveformJob job, FrequencyEstimate estimate, bool isPrimary, string note)
+    private static void Add(WaveformJob job, FrequencyEstimate estimate, bool isPrimary, string note)
     {
         (double value, Budget budget) = OnChain(job, estimate);
-        job.Sheet.Add(new Reading(Quantities.Frequency, value, job.Waveform.Axis.FrequencyUnit, budget, estimate.Method) { IsPrimary = isPrimary, Count = estimate.Count, Note = note });
+        job.Sheet.Add(new Reading(Quantities.Frequency, value, job.Waveform.Axis.FrequencyUnit, budget, estimate.Method)
+        {
+            IsPrimary = isPrimary,
+            Count = estimate.Count,
+            Note = note,
+        });
     }
 
     private static void AddPeriod(WaveformJob job, FrequencyEstimate estimate)
@@ -71,12 +110,17 @@ public static class FrequencyAnalyser
             return;
         }
         (double value, Budget budget) = OnChain(job, estimate);
-        job.Sheet.Add(new Reading(Quantities.FrequencyError, (value - nominal) / nominal * Million, "ppm", budget.Times(Million / nominal), estimate.Method)
+        job.Sheet.Add(new Reading(Quantities.FrequencyError, PartsPerMillion(value, nominal), "ppm", budget.Times(Million / nominal), estimate.Method)
         {
             Count = estimate.Count,
-            Note = $"against a nominal {Engineering.Format(nominal, "Hz", 10)}",
+            Note = $"against a nominal {(nominal / 1000).ToString("0.#########", CultureInfo.InvariantCulture)} kHz",
         });
     }
+
+    /// <summary>Deviation from nominal in millionths.</summary>
+    /// <param name="frequency">Hz.</param>
+    /// <param name="nominal">Hz, above 0.</param>
+    public static double PartsPerMillion(double frequency, double nominal) => (frequency - nominal) / nominal * Million;
 
     private static (string Code, string Reason) WhyNot(WaveShape shape, int edges) => shape.Kind == WaveKind.Flat
         ? ("flat", "the record is flat: it has no edges")

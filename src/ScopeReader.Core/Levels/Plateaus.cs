@@ -1,15 +1,17 @@
 using ScopeReader.Edges;
+using ScopeReader.Numerics;
 
 namespace ScopeReader.Levels;
 
 /// <summary>Cuts a two-state wave into the stretches that its levels are read on.</summary>
 /// <remarks>
 /// Of each whole plateau the later half, less one and a half transition durations before the next edge (there a Gaussian
-/// edge is within 1e-4 of its state). Where the edges leave less than a fifth of the plateau, its middle fifth.
+/// edge is within 1e-4 of its state). Where the edges leave less than a fifth of the plateau, its middle fifth, with what
+/// Gaussian edges leave there.
 /// </remarks>
 internal static class Plateaus
 {
-    private const double Guard = 1.5, LeastShare = 0.2;
+    private const double Guard = 1.5, LeastShare = 0.2, SettlingShare = 0.25, SettlingGuard = 2, SigmasPerDuration = 2.5631;
 
     /// <summary>The stretches; those of plateaus that the record cuts off only for a state that has no whole one.</summary>
     /// <param name="count">Samples in the record.</param>
@@ -23,7 +25,9 @@ internal static class Plateaus
             double from = transitions[i - 1].Instant, to = transitions[i].Instant, length = to - from;
             double trail = Math.Min(Guard * duration, (1 - LeastShare) / 2 * length);
             double lead = Math.Max(trail, Math.Min(length / 2, (1 - LeastShare) * length - trail));
-            Add(found, transitions[i - 1].IsRising, from + lead, to - trail, count);
+            double settling = Math.Min(lead, Math.Max(SettlingGuard * duration, SettlingShare * length));
+            double unsettled = trail < Guard * duration ? BoundedNormal.NormalCumulative(-SigmasPerDuration * trail / duration) : 0;
+            Add(found, transitions[i - 1].IsRising, from, from + settling, from + lead, to - trail, count, unsettled);
         }
         if (transitions.Count == 0)
             return found;
@@ -31,16 +35,20 @@ internal static class Plateaus
         Transition first = transitions[0], last = transitions[^1];
         // Nothing is known of an edge before the record: all of it up to the first edge counts.
         if (!found.Exists(p => p.IsHigh != first.IsRising))
-            Add(found, !first.IsRising, 0, first.Instant - Guard * duration, count);
+            Add(found, !first.IsRising, 0, 0, 0, first.Instant - Guard * duration, count, 0);
         if (!found.Exists(p => p.IsHigh == last.IsRising))
-            Add(found, last.IsRising, last.Instant + Math.Max(Guard * duration, (count - last.Instant) / 2), count, count);
+        {
+            double length = count - last.Instant;
+            Add(found, last.IsRising, last.Instant, last.Instant + Math.Max(SettlingGuard * duration, SettlingShare * length),
+                last.Instant + Math.Max(Guard * duration, length / 2), count, count, 0);
+        }
         return found;
     }
 
-    private static void Add(List<Plateau> found, bool isHigh, double from, double to, int count)
+    private static void Add(List<Plateau> found, bool isHigh, double edge, double settling, double from, double to, int count, double unsettled)
     {
         int first = Math.Max(0, (int)Math.Ceiling(from)), end = Math.Min(count, (int)Math.Floor(to) + 1);
         if (end > first)
-            found.Add(new Plateau(isHigh, first, end));
+            found.Add(new Plateau(isHigh, first, end, (int)Math.Round(edge), Math.Min(first, (int)Math.Ceiling(settling)), unsettled));
     }
 }

@@ -9,6 +9,9 @@ internal static class SineCheck
 {
     private const int Inspected = 20000, Harmonics = 5, LeastCycles = 4;
 
+    // From here up no harmonic lies below half the sample rate, and edges alias.
+    private const double FewSamples = 0.2;
+
     // Triangles have -18.3 dB of harmonics and are no sines.
     private const double MostHarmonicPower = 0.01, MostOtherPower = 0.35;
 
@@ -27,9 +30,9 @@ internal static class SineCheck
         // A stretch in the middle: the period from the whole record keeps its phase there.
         int length = (int)Math.Min(samples.Length, Math.Max(Inspected, Math.Ceiling(LeastCycles * fit.Period)));
         int start = (samples.Length - length) / 2, stride = Math.Max(1, length / Inspected);
-        // Under about twice as many samples per cycle the harmonic's columns are hard to tell from those of a lower one.
-        int harmonics = (int)Math.Clamp(Math.Ceiling(fit.Period / stride / 2) - 1, 1, Harmonics);
-        int size = 1 + 2 * harmonics, count = (length + stride - 1) / stride;
+        int count = (length + stride - 1) / stride;
+        int[] harmonics = Distinct(stride / fit.Period, count);
+        int size = 1 + 2 * harmonics.Length;
         if (count < 2 * size)
             return null;
 
@@ -41,8 +44,8 @@ internal static class SineCheck
         {
             double phase = 2 * Math.PI * (i - start) / fit.Period, value = samples[i] - (low + high) / 2;
             row[0] = 1;
-            for (int k = 1; k <= harmonics; k++)
-                (row[2 * k - 1], row[2 * k]) = Math.SinCos(k * phase);
+            for (int k = 0; k < harmonics.Length; k++)
+                (row[2 * k + 1], row[2 * k + 2]) = Math.SinCos(harmonics[k] * phase);
             squares += value * value;
             for (int a = 0; a < size; a++)
             {
@@ -64,4 +67,27 @@ internal static class SineCheck
         bool isSine = double.IsFinite(fundamental) && others <= MostHarmonicPower * fundamental && rest <= MostOtherPower * fundamental;
         return isSine ? ((low + high) / 2 + c[0], Math.Sqrt(2 * fundamental), Math.Sqrt(rest)) : null;
     }
+
+    // The harmonics that are folded onto neither another one nor the mean; beyond half the sample rate they still show.
+    private static int[] Distinct(double frequency, int count)
+    {
+        var found = new List<int>();
+        for (int k = 1; k <= Harmonics; k++)
+        {
+            double folded = Folded(k * frequency), nearest = Math.Min(folded, 0.5 - folded);
+            foreach (int other in found)
+                nearest = Math.Min(nearest, Math.Abs(folded - Folded(other * frequency)));
+            if (k == 1 || nearest > 2.0 / count)
+                found.Add(k);
+        }
+        return [.. found];
+    }
+
+    private static double Folded(double frequency) => Math.Abs(frequency - Math.Round(frequency));
+
+    /// <summary>The same for a sine of fewer than five samples a cycle, whose edges say little.</summary>
+    public static (double Offset, double Amplitude, double Noise)? FitLine(ReadOnlySpan<double> samples) =>
+        InterpolatedFft.Estimate(samples) is { CyclesPerSample: > FewSamples } line && SineFit.From(samples, line.CyclesPerSample) is { } sine
+            && sine.ResidualRms * sine.ResidualRms <= MostOtherPower * sine.Amplitude * sine.Amplitude / 2
+            ? (sine.Offset, sine.Amplitude, sine.ResidualRms) : null;
 }

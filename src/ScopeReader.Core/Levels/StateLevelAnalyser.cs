@@ -64,7 +64,7 @@ public static class StateLevelAnalyser
     {
         Plateau[] own = [.. plateaus.Where(p => p.IsHigh == isHigh)];
         if (own.Length > 0)
-            return StateEstimate.Average(samples, own, shape.Step);
+            return StateEstimate.Average(samples, own, shape.Step, shape.Swing);
         // No sample is clear of the edges: the shorth itself, as uncertain as the nearest samples are scattered.
         double level = isHigh ? shape.Upper : shape.Lower;
         return new StateEstimate(level, [BudgetTerm.Rectangular("settling", Math.Max(3 * shape.Noise, 0.05 * shape.Swing))], shape.Noise, 1);

@@ -37,8 +37,10 @@ public static class WaveShapeAnalyser
         double onStates = (onLow + onHigh) / samples.Length, between = (double)histogram.Between(low + swing / 3, high - swing / 3) / samples.Length;
         bool twoStates = swing > LeastSeparation * scatter && Math.Min(onLow, onHigh) >= FewestOnState
             && (onStates >= MostlyNear || (onStates >= LargelyNear && between <= SeldomBetween));
-        return twoStates && StateLevelAnalyser.AreApart(samples, low, high, noise)
-            ? new WaveShape(WaveKind.TwoState, minimum, maximum, step, low, high, noise)
+        if (twoStates && StateLevelAnalyser.AreApart(samples, low, high, noise))
+            return new WaveShape(WaveKind.TwoState, minimum, maximum, step, low, high, noise);
+        return SineCheck.FitLine(samples) is { } fast
+            ? new WaveShape(WaveKind.Sinusoidal, minimum, maximum, step, fast.Offset - fast.Amplitude, fast.Offset + fast.Amplitude, fast.Noise)
             : new WaveShape(WaveKind.Other, minimum, maximum, step, minimum, maximum, noise);
     }
 
