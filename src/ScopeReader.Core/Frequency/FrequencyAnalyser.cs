@@ -47,7 +47,7 @@ public static class FrequencyAnalyser
         foreach (FrequencyEstimate? other in (ReadOnlySpan<FrequencyEstimate?>)[crossings?.Estimate, line, sine])
             if (other is not null && other != primary)
             {
-                Add(job, other, isPrimary: false, "for comparison");
+                Add(job, other, isPrimary: false, note: null);
                 FrequencyFindings.Compare(job, primary, other);
             }
         AddPeriod(job, primary);
@@ -78,7 +78,7 @@ public static class FrequencyAnalyser
         return (value, job.Chain.ForTime(value, estimate.Terms.Select(t => t.Times(perSample))));
     }
 
-    private static void Add(WaveformJob job, FrequencyEstimate estimate, bool isPrimary, string note)
+    private static void Add(WaveformJob job, FrequencyEstimate estimate, bool isPrimary, string? note)
     {
         (double value, Budget budget) = OnChain(job, estimate);
         job.Sheet.Add(new Reading(Quantities.Frequency, value, job.Waveform.Axis.FrequencyUnit, budget, estimate.Method)
