@@ -15,7 +15,7 @@ namespace ScopeReader.Frequency;
 public sealed class EdgeRegression
 {
     private const int Guessed = 10001, WanderBlocks = 10, FewestForWander = 50, FewestForPhase = 40;
-    private const double OutlierMultiple = 8, WanderLimit = 3;
+    private const double OutlierMultiple = 8, LeastStray = 0.05, WanderLimit = 3;
 
     private readonly double[][] _instants;
     private readonly int[][] _cycles;
@@ -25,7 +25,7 @@ public sealed class EdgeRegression
     private EdgeRegression(double[][] instants, int[][] cycles)
     {
         (_instants, _cycles) = (instants, cycles);
-        _used = [.. instants.Select(t => Enumerable.Repeat(true, t.Length).ToArray())];
+        _used = [.. instants.Select(t => AllUsed(t.Length))];
     }
 
     /// <summary>The period, in the unit of the instants.</summary>
@@ -161,21 +161,20 @@ public sealed class EdgeRegression
     {
         if (Edges < 10)
             return false;
-        // The median distance, in units of sigma; never under the last digits of an instant.
+        double furthest = 0;
+        for (int g = 0; g < 2; g++)
+            for (int i = 0; i < _instants[g].Length; i++)
+                furthest = Math.Max(furthest, Math.Abs(Residual(g, i)));
+        // Only clear strays: a rounding pattern can have a median of nothing.
+        if (furthest < LeastStray * Period)
+            return false;
         var distances = new double[Edges];
         int k = 0;
         for (int g = 0; g < 2; g++)
             for (int i = 0; i < _instants[g].Length; i++)
                 distances[k++] = Math.Abs(Residual(g, i));
         Array.Sort(distances);
-        if (distances[^1] <= OutlierMultiple * Spread)
-        {
-            double limit = OutlierMultiple * 1.4826 * distances[Edges / 2];
-            // Only clear strays: a rounding pattern can have a median of nothing.
-            if (distances[^1] <= limit || distances[^1] < 0.05 * Period)
-                return false;
-        }
-        double most = Math.Max(OutlierMultiple * 1.4826 * distances[Edges / 2], 0.05 * Period);
+        double most = Math.Max(OutlierMultiple * 1.4826 * distances[Edges / 2], LeastStray * Period);
         for (int g = 0; g < 2; g++)
             for (int i = 0; i < _instants[g].Length; i++)
                 if (Math.Abs(Residual(g, i)) > most)
@@ -254,8 +253,16 @@ public sealed class EdgeRegression
     {
         double phase = 2 * Math.PI * (instant - Math.Floor(instant));
         (row[0], row[1]) = (cycle, 1);
+        var (sin, cos) = Math.SinCos(phase);
         for (int h = 0; h < harmonics.Length; h++)
-            (row[2 + 2 * h], row[3 + 2 * h]) = Math.SinCos(harmonics[h] * phase);
+            (row[2 + 2 * h], row[3 + 2 * h]) = harmonics[h] == 1 ? (sin, cos) : (2 * sin * cos, 1 - 2 * sin * sin);
+    }
+
+    private static bool[] AllUsed(int count)
+    {
+        var used = new bool[count];
+        Array.Fill(used, true);
+        return used;
     }
 
     // Slow wander of the phase (a real oscillator's, or the digitiser's) leaves residuals that stay on one side for a while:

@@ -5,12 +5,13 @@ namespace ScopeReader.Levels;
 
 /// <summary>Cuts a two-state wave into the stretches that its levels are read on.</summary>
 /// <remarks>
-/// Of each whole plateau the later half, less one and a half transition durations before the next edge (there a Gaussian
+/// Of each whole plateau (beyond 200,000, of every so many) the later half, less one and a half transition durations before the next edge (there a Gaussian
 /// edge is within 1e-4 of its state). Where the edges leave less than a fifth of the plateau, its middle fifth, with what
 /// Gaussian edges leave there.
 /// </remarks>
 internal static class Plateaus
 {
+    private const int MostPlateaus = 200_000;
     private const double Guard = 1.5, LeastShare = 0.2, SettlingShare = 0.25, SettlingGuard = 2, SigmasPerDuration = 2.5631;
 
     /// <summary>The stretches; those of plateaus that the record cuts off only for a state that has no whole one.</summary>
@@ -20,7 +21,9 @@ internal static class Plateaus
     public static IReadOnlyList<Plateau> Find(int count, IReadOnlyList<Transition> transitions, double duration)
     {
         var found = new List<Plateau>();
-        for (int i = 1; i < transitions.Count; i++)
+        // An odd stride takes both states in turn.
+        int stride = transitions.Count / MostPlateaus * 2 + 1;
+        for (int i = 1; i < transitions.Count; i += stride)
         {
             double from = transitions[i - 1].Instant, to = transitions[i].Instant, length = to - from;
             double trail = Math.Min(Guard * duration, (1 - LeastShare) / 2 * length);

@@ -22,6 +22,7 @@ internal static class SineCheck
     /// <param name="noise">Rough noise.</param>
     public static (double Offset, double Amplitude, double Noise)? Fit(ReadOnlySpan<double> samples, double low, double high, double noise)
     {
+        samples = Scattered.Stretch(samples, low, high, noise);
         IReadOnlyList<Transition> transitions = Transitions.Find(samples, low, high, noise);
         double[] rising = [.. transitions.Where(t => t.IsRising).Select(t => t.Instant)], falling = [.. transitions.Where(t => !t.IsRising).Select(t => t.Instant)];
         if (EdgeRegression.Fit(rising, falling, samplePhase: false) is not { } fit || fit.Spread > 0.15 * fit.Period)

@@ -47,7 +47,7 @@ public static class StateLevelAnalyser
     /// <summary>Whether the samples clear of the edges bear the two levels out: of a sine with few samples a cycle they don't.</summary>
     internal static bool AreApart(ReadOnlySpan<double> samples, double low, double high, double noise)
     {
-        (StateEstimate below, StateEstimate above) = Estimate(samples, new WaveShape(WaveKind.TwoState, low, high, 0, low, high, noise));
+        (StateEstimate below, StateEstimate above) = Estimate(Scattered.Stretch(samples, low, high, noise), new WaveShape(WaveKind.TwoState, low, high, 0, low, high, noise));
         return above.Level - below.Level > 0.5 * (high - low);
     }
 
