@@ -5,6 +5,7 @@ using ScopeReader.Coverage;
 int runs = 200;
 ulong first = 1;
 bool truth = false;
+string? save = null;
 var names = new List<string>();
 for (int i = 0; i < args.Length; i++)
 {
@@ -15,6 +16,10 @@ for (int i = 0; i < args.Length; i++)
         case "--seed" when ulong.TryParse(value, NumberStyles.None, CultureInfo.InvariantCulture, out first):
             i++;
             break;
+        case "--save" when value is not null:
+            save = value;
+            i++;
+            break;
         case "--truth":
             truth = true;
             break;
@@ -23,7 +28,7 @@ for (int i = 0; i < args.Length; i++)
             i++;
             break;
         default:
-            Console.Error.WriteLine($"expected --runs N, --seed N (the first seed), --scenario NAME[,NAME] or --truth, found \"{args[i]}\"");
+            Console.Error.WriteLine($"expected --runs N, --seed N (the first seed), --scenario NAME[,NAME], --truth or --save FILE.csv, found \"{args[i]}\"");
             return 64;
     }
 }
@@ -40,6 +45,8 @@ foreach (Scenario scenario in Scenarios.All.Where(s => names.Count == 0 || names
     // Each seed is on its own, so the table does not depend on how many cores there are.
     var done = new Run[runs];
     Parallel.For(0, runs, i => done[i] = Run.Of(scenario, first + (ulong)i));
+    if (save is not null)
+        SavedCase.Write(scenario.Draw(first), save);
     if (truth)
         Table.WriteTruth(done, first, Console.Out);
     Table.Write(scenario, done, Console.Out);
