@@ -2,6 +2,7 @@ using ScopeReader.Edges;
 using ScopeReader.Frequency;
 using ScopeReader.Harmonics;
 using ScopeReader.Levels;
+using ScopeReader.Readings;
 using ScopeReader.Ringing;
 
 namespace ScopeReader;
@@ -15,6 +16,12 @@ public static class WaveformAnalysis
         ArgumentNullException.ThrowIfNull(job);
         ReadOnlySpan<double> samples = job.Waveform.Samples;
 
+        if (!IsOfThisWorld(job))
+        {
+            job.Sheet.Refuse("out-of-range", "values or times lie beyond anything a bench can have; check the file's units and the plan's scale",
+                [.. Quantities.All.Where(q => q.Kinds.HasFlag(CaptureKinds.Waveform))]);
+            return;
+        }
         WaveShape shape = WaveShapeAnalyser.Look(samples);
         job.Cancellation.ThrowIfCancellationRequested();
         StateLevels? states = StateLevelAnalyser.Measure(job, shape);
@@ -34,5 +41,15 @@ public static class WaveformAnalysis
         RingingAnalyser.Measure(job, edges);
         job.Cancellation.ThrowIfCancellationRequested();
         HarmonicAnalyser.Measure(job, frequency?.Primary);
+    }
+
+    // Squares and reciprocals of what passes here stay far inside a double.
+    private static bool IsOfThisWorld(WaveformJob job)
+    {
+        const double smallest = 1e-40, largest = 1e40;
+        double most = 0;
+        foreach (double v in job.Waveform.Samples)
+            most = Math.Max(most, Math.Abs(v));
+        return (most == 0 || most is > smallest and < largest) && job.Waveform.Interval is > smallest and < largest;
     }
 }

@@ -69,8 +69,8 @@ internal static class EdgeAberrations
         double floor = double.Hypot(double.Hypot(100 * extremum.Floor, byStates), 100 * extremum.Bend);
         if (percent < ResolvedOverFloor * floor || percent <= 0)
         {
-            job.Sheet.Refuse("not-resolved", string.Create(CultureInfo.InvariantCulture,
-                $"no excursion above {Math.Max(ResolvedOverFloor * floor, 1e-4):0.####} % of amplitude, the least that this capture can show"), quantity);
+            double least = Math.Max(ResolvedOverFloor * floor, 1e-4);
+            job.Sheet.RefuseBelow("not-resolved", $"no excursion above {Engineering.Given(least, "%", 2)} of amplitude, the least that this capture can show", least, quantity);
             return;
         }
         BudgetTerm[] terms =

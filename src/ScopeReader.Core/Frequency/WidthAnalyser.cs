@@ -13,6 +13,9 @@ public static class WidthAnalyser
 {
     private const string Method = "crossings";
 
+    // With fewer samples a period the two edges' interpolation errors are as large as what is measured.
+    private const double FewestSamples = 4;
+
     /// <summary>Measures and writes down, or why not.</summary>
     /// <param name="job">The waveform and where readings go.</param>
     /// <param name="transitions">Its transitions, in order.</param>
@@ -22,6 +25,11 @@ public static class WidthAnalyser
     {
         ArgumentNullException.ThrowIfNull(job);
         ArgumentNullException.ThrowIfNull(transitions);
+        if (crossings is { Grid.Period: < FewestSamples })
+        {
+            job.Sheet.Refuse("too-few-samples", "fewer than four samples a period leave the instants of the edges open; sample faster", Quantities.DutyFactor, Quantities.HighWidth, Quantities.LowWidth);
+            return;
+        }
         if (crossings is { Grid: { RisingOrigin: { } rising, FallingOrigin: { } falling } grid, RisingSlope: > 0, FallingSlope: > 0 })
         {
             double period = grid.Period, high = falling - rising - Math.Floor((falling - rising) / period) * period;

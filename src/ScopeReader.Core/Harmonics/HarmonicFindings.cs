@@ -24,9 +24,10 @@ internal sealed class HarmonicFindings(WaveformJob job, RollOff rollOff, IReadOn
         double duty = reading.Value / 100;
         if (duty is <= 0 or >= 1)
             return;
-        if (Level(3) is { } third && IdealPulse.LevelDbc(duty, 3) is var ideal && third > ideal - PulseBelow && third < ideal + PulseAbove)
-            job.Sheet.Add(new Finding("pulse-harmonics",
-                Text($"harmonic 3 is {third:F1} dBc, and an ideal pulse of {100 * duty:F1} % duty factor has {ideal:F1} dBc: it is the shape of the wave, no distortion of a sine"), "pulse"));
+        if (!(Level(3) is { } third && IdealPulse.LevelDbc(duty, 3) is var ideal && third > ideal - PulseBelow && third < ideal + PulseAbove))
+            return; // A sine's even harmonics make its duty factor, and not the other way round.
+        job.Sheet.Add(new Finding("pulse-harmonics",
+            Text($"harmonic 3 is {third:F1} dBc, and an ideal pulse of {100 * duty:F1} % duty factor has {ideal:F1} dBc: it is the shape of the wave, no distortion of a sine"), "pulse"));
         double even = IdealPulse.LevelDbc(duty, 2);
         if (Level(2) is { } second && Math.Abs(second - even) < EvenNear)
             job.Sheet.Add(new Finding("even-harmonics",

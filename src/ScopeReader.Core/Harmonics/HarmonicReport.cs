@@ -61,19 +61,24 @@ internal sealed class HarmonicReport
     {
         if (!line.IsResolved)
         {
-            _job.Sheet.Refuse(line.IsHiddenBySteps ? "quantisation" : "below-noise", Hidden(line), quantity);
+            Hide(line, quantity);
             return null;
         }
         Budget budget = _job.Chain.ForRelativeDecibels([.. line.Terms(), .. Fundamental.Terms(" of fundamental"), .. _rollOff.Terms(line.Order), Frequency(line.Order)]);
         return new Reading(quantity, Decibels.OfAmplitudes(line.Amplitude / Fundamental.Amplitude), "dBc", budget, Method) { Count = _cycles };
     }
 
-    private string Hidden(HarmonicLevel line)
+    private void Hide(HarmonicLevel line, Quantity quantity)
     {
         double bound = Decibels.OfAmplitudes(line.Threshold / Fundamental.Amplitude);
-        return line.IsHiddenBySteps
+        string code = line.IsHiddenBySteps ? "quantisation" : "below-noise", reason = line.IsHiddenBySteps
             ? Text($"< {bound:F1} dBc: not resolved from the converter's steps, for no noise spreads them; use more of the range, or more bits")
             : Text($"< {bound:F1} dBc: noise alone shows as much in one record of a hundred; capture longer");
+        // The bound holds at the source only where the chain's flatness is known.
+        if (_job.Plan.Chain.FlatnessDb is { } flatness)
+            _job.Sheet.RefuseBelow(code, reason, bound + flatness, quantity);
+        else
+            _job.Sheet.Refuse(code, reason, quantity);
     }
 
     private string AboveNyquist(int order) => _job.Waveform.Axis.IsTimed

@@ -10,6 +10,8 @@ namespace ScopeReader.Levels;
 /// </remarks>
 public static class LevelAnalyser
 {
+    private const int FewestSamples = 4;
+
     /// <summary>Measures and writes down.</summary>
     /// <param name="job">The waveform and where readings go.</param>
     /// <param name="shape">What the first look gave.</param>
@@ -20,6 +22,14 @@ public static class LevelAnalyser
         ArgumentNullException.ThrowIfNull(job);
         ArgumentNullException.ThrowIfNull(shape);
         ReadOnlySpan<double> samples = job.Waveform.Samples;
+        if (shape.Kind == WaveKind.Flat || samples.Length < FewestSamples)
+        {
+            job.Sheet.Refuse("flat", samples.Length < FewestSamples
+                ? "too few samples to tell the wave from its noise"
+                : $"every sample is {Engineering.Format(shape.Minimum, job.Waveform.Unit)}: how fine the converter's steps are does not show, and so no uncertainty can be stated",
+                Quantities.Mean, Quantities.Rms, Quantities.PeakToPeak);
+            return;
+        }
         if (period is { } p && p >= 2 && p <= samples.Length)
         {
             var (mean, square, periods) = WholePeriods.Average(samples, p, noise);

@@ -33,8 +33,11 @@ public static class Judge
             return new Verdict(limit, VerdictOutcome.NotApplicable, null, null, kind == CaptureKinds.Waveform ? "a waveform does not have it" : "a spectrum trace does not have it");
         if (sheet.Primary(limit.Quantity) is { } reading)
             return Reading(limit, reading);
-        string reason = sheet.NotMeasured.FirstOrDefault(n => n.Quantity == limit.Quantity)?.Reason ?? "this capture does not show it";
-        return new Verdict(limit, VerdictOutcome.NotMeasured, null, null, reason);
+        NotMeasured? why = sheet.NotMeasured.FirstOrDefault(n => n.Quantity == limit.Quantity);
+        // Too small to resolve is small enough for an upper limit that lies higher than what could have been resolved.
+        if (why is { AtMost: { } bound } && limit.Low is null && bound <= limit.High)
+            return new Verdict(limit, VerdictOutcome.Pass, null, null, $"too small to resolve, and so inside: {why.Reason}");
+        return new Verdict(limit, VerdictOutcome.NotMeasured, null, null, why?.Reason ?? "this capture does not show it");
     }
 
     /// <summary>The verdict on one reading.</summary>

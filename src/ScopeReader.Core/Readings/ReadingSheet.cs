@@ -29,6 +29,10 @@ public sealed class ReadingSheet
             _notMeasured.Add(new NotMeasured(quantity, code, reason));
     }
 
+    /// <summary>Writes down that a quantity is too small to resolve, and what it lies below: an upper limit can be judged on that.</summary>
+    public void RefuseBelow(string code, string reason, double atMost, Quantity quantity) =>
+        _notMeasured.Add(new NotMeasured(quantity, code, reason, atMost));
+
     /// <summary>The primary reading of a quantity, or null.</summary>
     public Reading? Primary(Quantity quantity) => _readings.Find(r => r.IsPrimary && r.Quantity == quantity);
 }

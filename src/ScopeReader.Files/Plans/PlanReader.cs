@@ -1,5 +1,6 @@
 using System.Text;
 using ScopeReader.Captures;
+using ScopeReader.Levels;
 using ScopeReader.Limits;
 
 namespace ScopeReader.Files.Plans;
@@ -55,6 +56,7 @@ public static class PlanReader
                     plan = section.Name == PlanKeyList.Conditions ? AddCondition(plan, key, value) : Apply(plan, section.Name, key, value);
         }
         CheckTimebase(plan.Chain, document);
+        CheckLevels(plan.Levels, document);
         // Limits come last: they are held against the other tables, wherever those stand.
         Limit[] limits = [.. document.Sections.Where(s => s.Name == PlanKeyList.Limit).Select(s => LimitReader.Read(s, plan, file))];
         return plan with { Limits = limits };
@@ -82,6 +84,13 @@ public static class PlanReader
             throw new PlanException(file, section.Line, $"unknown table \"{section.Name}\"; {NearestWord.Hint(section.Name, PlanKeyList.Tables)}");
         if (section.IsList != (section.Name == PlanKeyList.Limit))
             throw new PlanException(file, section.Line, section.IsList ? $"expected [{section.Name}], found [[{section.Name}]]" : "expected [[limit]], with two brackets, found [limit]");
+    }
+
+    private static void CheckLevels(LevelSettings levels, PlanDocument document)
+    {
+        if (levels is { Low: { } low, High: { } high } && low >= high)
+            throw document.Sections.Where(s => s.Name == PlanKeyList.Levels).SelectMany(s => s.Entries).First(e => e.Key == "low").Value
+                .Wrong("the low state level is not below the high one");
     }
 
     // Half a calibration would be taken for none, and the correction or its ageing lost without a word.

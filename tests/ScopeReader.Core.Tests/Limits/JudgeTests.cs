@@ -1,3 +1,4 @@
+using ScopeReader.Captures;
 using ScopeReader.Limits;
 using ScopeReader.Readings;
 
@@ -111,5 +112,19 @@ public class JudgeTests
 
         Assert.Equal("the limit is in Hz and the reading in 1/sample: state the sample interval with --interval or --rate",
             Judge.Reading(new Limit(Quantities.Frequency, 1, null), reading).Reason);
+    }
+
+    [Theory]
+    [InlineData(null, 5.0, VerdictOutcome.Pass)]
+    [InlineData(null, 0.04, VerdictOutcome.NotMeasured)]
+    [InlineData(0.0, 5.0, VerdictOutcome.NotMeasured)]
+    public void Too_small_to_resolve_is_inside_an_upper_limit_above_what_shows(double? low, double high, VerdictOutcome expected)
+    {
+        var waveform = new Waveform("A", "V", TimeAxis.PerSample, [0, 1]);
+        var sheet = new ReadingSheet();
+        sheet.RefuseBelow("not-resolved", "no excursion above 0.05 % of amplitude, the least that this capture can show", 0.05, Quantities.RiseOvershoot);
+        var plan = new Plan { Limits = [new Limit(Quantities.RiseOvershoot, low, high)] };
+
+        Assert.Equal(expected, Assert.Single(Judge.Channel(plan, waveform, sheet)).Outcome);
     }
 }
