@@ -25,7 +25,7 @@ internal sealed class PlanDocument
     /// <exception cref="PlanException">The text is not TOML.</exception>
     public static PlanDocument Parse(string text, string file)
     {
-        DocumentSyntax syntax = SyntaxParser.Parse(text, file, validate: true);
+        DocumentSyntax syntax = Read(text, file);
         if (syntax.HasErrors)
         {
             DiagnosticMessage first = syntax.Diagnostics.Where(d => d.Kind == DiagnosticMessageKind.Error).MinBy(d => d.Span.Start.Offset)!;
@@ -44,6 +44,19 @@ internal sealed class PlanDocument
                 section.Add(Name(pair.Key!), document.Value(Name(pair.Key!), pair));
         }
         return document;
+    }
+
+    private static DocumentSyntax Read(string text, string file)
+    {
+        try
+        {
+            return SyntaxParser.Parse(text, file, validate: true);
+        }
+        catch (ArgumentOutOfRangeException)
+        {
+            // The parser's lexer trips over an escape that stands for no character, and does not say where: the first may be it.
+            throw new PlanException(file, text.AsSpan(0, Math.Max(0, text.IndexOf('\\'))).Count('\n') + 1, "not readable as TOML: a text in it has a backslash that begins no escape; write \\\\ for a backslash");
+        }
     }
 
     // "chain.impedance = …", "chain = { … }" and "limit = [{ … }]" are the same tables, written on one line.

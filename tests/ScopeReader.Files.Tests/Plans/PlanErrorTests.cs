@@ -14,6 +14,7 @@ public class PlanErrorTests
     [InlineData("[[limit]]\nhigh = \"1 us\"\n\n# edges\nquantity = \"rise-tme\"", "plan.toml, line 5: unknown quantity \"rise-tme\"; the nearest is rise-time")]
     [InlineData("[[limit]]\nquantity = \"thd\"\nmax = \"1 %\"", "plan.toml, line 3: unknown key \"max\"; expected one of quantity, low, high, rule, guard, channel")]
     [InlineData("[chain]\ntimebase-tolerance = \"25 pmm\"", "plan.toml, line 2: timebase-tolerance: unknown unit \"pmm\"; the nearest is ppm")]
+    [InlineData("[levels]\nlow = \"3 V\"\nhigh = \"1 V\"", "plan.toml, line 2: low: the low state level is not below the high one")]
     [InlineData("nominal = \"455 kHx\"", "plan.toml, line 1: nominal: unknown unit \"kHx\"; the nearest is kHz")]
     [InlineData("[conditions]\nsupply = \"5 Vlt\"", "plan.toml, line 2: supply: unknown unit \"Vlt\"; the nearest is V")]
     [InlineData("[import]\nunits = [\"ms\",\n\"mVV\"]", "plan.toml, line 3: unknown unit \"mVV\"; the nearest is mV")]

@@ -27,5 +27,5 @@ public class PlanLawTests
             {
                 return e.Line is >= 1 && e.Line <= text.Count(c => c == '\n') + 1;
             }
-        }, iter: 2000);
+        }, seed: "f7SMPt04c9A2", iter: 2000); // A seed whose first text made the parser itself throw.
 }
