@@ -17,6 +17,7 @@ internal static class Scenarios
     public static IReadOnlyList<Scenario> All { get; } =
     [
         new("square", "ringing square wave, 455 kHz, 364 cycles, noise 40 dB below the swing", s => Square(s, new())),
+        new("repeated", "one ringing square wave, taken again and again: phase, timebase and noise alone differ", s => Square(s, new() { IsOneWave = true })),
         new("square-12", "the same through a 12-bit converter", s => Square(s, new() { Bits = 12 })),
         new("square-8", "the same through an 8-bit converter", s => Square(s, new() { Bits = 8 })),
         new("coarse", "8-bit converter, no noise at all", s => Square(s, new() { Bits = 8, Noise = 0 })),
@@ -44,11 +45,12 @@ internal static class Scenarios
         public int Count { get; init; } = Long;
         public int? TimeDigits { get; init; }
         public bool Bounds { get; init; }
+        public bool IsOneWave { get; init; }
     }
 
     private static MadeCase Square(ulong seed, Kind kind)
     {
-        var draw = new NormalNoise(seed);
+        var draw = new NormalNoise(kind.IsOneWave ? 1 : seed);
         double low = draw.Uniform(-0.1, 0.1), swing = draw.Uniform(3, 3.6);
         var wave = new SquareWave
         {
@@ -62,7 +64,7 @@ internal static class Scenarios
         };
         // The converter's range is 1.5 to 1.7 swings; where the states lie between its codes is left to chance.
         double range = swing * draw.Uniform(1.5, 1.7), bottom = low - range * draw.Uniform(0.18, 0.22);
-        return Recorded(wave.Signal, wave.Truth(), draw, new Recording
+        return Recorded(wave.Signal, wave.Truth(), kind.IsOneWave ? new NormalNoise(seed) : draw, new Recording
         {
             Interval = Interval,
             Count = kind.Count,

@@ -48,7 +48,8 @@ internal static class EdgeSettling
         // Along a slope a band moved in or out moves the entry alike and little; a whole swing takes longer than the edge.
         bool jumps = jump > 3 * Math.Min(later, earlier) + 0.05 * duration || jump > duration;
         BudgetTerm[] terms = jumps
-            ? [BudgetTerm.Rectangular("band", jump * toTime)]
+            // The error is nothing or a whole jump: the 95 % of the bound that the interval keeps must hold all of it.
+            ? [BudgetTerm.Rectangular("band", (jump + Math.Min(Doubts * noise / slope, jump / 10)) / Budget.Coverage * toTime)]
             : [
                 BudgetTerm.Normal("noise", double.Hypot(noise / slope, edge.Middle.Noise) * toTime),
                 // The state after the edge moves the band and the 50 % instant, the one before it the instant alone.
