@@ -5,7 +5,7 @@ cd "$(dirname "$0")/.."
 command=$(grep -m1 '^dotnet run .* measure' README.md)
 printed=$(mktemp)
 trap 'rm -f "$printed"' EXIT
-NO_COLOR=1 $command > "$printed"
+NO_COLOR=1 COLUMNS=80 $command > "$printed"
 awk -v command="$command" -v printed="$printed" '
   state == 2 && /^```$/ { state = 3 }
   state == 2 { next }

@@ -1,4 +1,5 @@
 using System.Diagnostics;
+using System.Globalization;
 
 namespace ScopeReader.Program.Tests;
 
@@ -9,7 +10,10 @@ internal static class BuiltProgram
     public static string Root { get; } = FindRoot();
 
     /// <summary>Runs it in <see cref="Root"/> and waits for its end.</summary>
-    public static async Task<(int Status, string Output, string Error)> Run(params IEnumerable<string> arguments)
+    public static Task<(int Status, string Output, string Error)> Run(params IEnumerable<string> arguments) => RunAt(80, arguments);
+
+    /// <summary>Runs it for lines of so many columns.</summary>
+    public static async Task<(int Status, string Output, string Error)> RunAt(int columns, params IEnumerable<string> arguments)
     {
         var start = new ProcessStartInfo("dotnet") { WorkingDirectory = Root, RedirectStandardOutput = true, RedirectStandardError = true, RedirectStandardInput = true };
         // The program's own file lies beside this test's, where the build puts what it references.
@@ -17,6 +21,7 @@ internal static class BuiltProgram
         foreach (string argument in arguments)
             start.ArgumentList.Add(argument);
         start.Environment["NO_COLOR"] = "1";
+        start.Environment["COLUMNS"] = columns.ToString(CultureInfo.InvariantCulture);
 
         using Process process = Process.Start(start)!;
         process.StandardInput.Close();

@@ -1,3 +1,4 @@
+using System.Globalization;
 using System.Text;
 
 namespace ScopeReader.Commands;
@@ -10,7 +11,7 @@ namespace ScopeReader.Commands;
 /// <param name="Today">The day that ageing is counted to.</param>
 internal sealed record Surroundings(TextWriter Output, TextWriter Error, Func<int> Width, bool Colour, DateOnly Today)
 {
-    private const int UsualWidth = 80;
+    private const int UsualWidth = 80, NarrowestWidth = 20, WidestWidth = 1000;
 
     /// <summary>The process's own.</summary>
     /// <remarks>
@@ -20,10 +21,28 @@ internal sealed record Surroundings(TextWriter Output, TextWriter Error, Func<in
     public static Surroundings OfProcess()
     {
         bool redirected = Console.IsOutputRedirected;
-        bool wanted = Environment.GetEnvironmentVariable("NO_COLOR") is null or "" && Environment.GetEnvironmentVariable("TERM") is not "dumb";
-        return new Surroundings(Writer(Console.OpenStandardOutput()), Writer(Console.OpenStandardError()), () => redirected ? UsualWidth : WindowWidth(),
-            !redirected && wanted, DateOnly.FromDateTime(DateTime.Now));
+        bool modes = !redirected && Environment.GetEnvironmentVariable("TERM") is not "dumb";
+        StreamWriter output = Writer(Console.OpenStandardOutput());
+        return new Surroundings(output, Writer(Console.OpenStandardError()), Width,
+            modes && Environment.GetEnvironmentVariable("NO_COLOR") is null or "", DateOnly.FromDateTime(DateTime.Now));
+
+        int Width()
+        {
+            if (StatedWidth() is { } stated)
+                return stated;
+            if (redirected)
+                return UsualWidth;
+            int width = WindowWidth();
+            // The runtime has set these modes to learn the width.
+            if (modes)
+                output.Write(TerminalModes.CursorAndKeypadKeys);
+            return width;
+        }
     }
+
+    // POSIX: where COLUMNS is set, it is what the person wants.
+    private static int? StatedWidth() => int.TryParse(Environment.GetEnvironmentVariable("COLUMNS"), NumberStyles.None, CultureInfo.InvariantCulture, out int width)
+        && width is >= NarrowestWidth and <= WidestWidth ? width : null;
 
     private static StreamWriter Writer(Stream stream) => new(stream, new UTF8Encoding(encoderShouldEmitUTF8Identifier: false)) { AutoFlush = true, NewLine = "\n" };
 

@@ -12,12 +12,9 @@ namespace ScopeReader.Bench.Shell;
 /// </remarks>
 internal sealed class TerminalGuard : IDisposable
 {
-    // The runtime sets these as it takes the keyboard over, and leaves them set.
-    private const string CursorAndKeypadKeys = "\e[?1l\e>";
-
     // Title, paste, mouse and keyboard modes, attributes, main screen, cursor.
-    private const string Restoring = CursorAndKeypadKeys + "\e[23;2t\e[?2004l\e[?1003l\e[?1002l\e[?1000l\e[?1015l\e[?1006l\e[<u\e[0m\e[?1049l\e[?25h";
-    private const string PushTitle = "\e[22;2t", PopTitle = "\e[23;2t" + CursorAndKeypadKeys;
+    private const string Restoring = TerminalModes.CursorAndKeypadKeys + "\e[23;2t\e[?2004l\e[?1003l\e[?1002l\e[?1000l\e[?1015l\e[?1006l\e[<u\e[0m\e[?1049l\e[?25h";
+    private const string PushTitle = "\e[22;2t", PopTitle = "\e[23;2t" + TerminalModes.CursorAndKeypadKeys;
     private static readonly TimeSpan Patience = TimeSpan.FromSeconds(2);
 
     private readonly List<PosixSignalRegistration> _signals = [];
