@@ -18,8 +18,9 @@ public static class ConditionText
     public static Condition Parse(string text)
     {
         ArgumentNullException.ThrowIfNull(text);
+        // A prefix multiplies, which can spoil the last bit: 5100 mV is 5.1 V.
         return Units.TryParse(text, out double value, out string unit)
-            ? new Condition(value, unit)
+            ? new Condition(double.Parse(value.ToString("G15", CultureInfo.InvariantCulture), CultureInfo.InvariantCulture), unit)
             : throw new FormatException($"expected a number with its unit, such as 5 V, found \"{text}\"");
     }
 }

@@ -19,7 +19,7 @@ public sealed partial class MeasurementArchive
         ArgumentException.ThrowIfNullOrEmpty(folder);
         if (File.Exists(folder) || (Directory.Exists(folder) && Directory.EnumerateFileSystemEntries(folder).Any()))
             throw new ArchiveException(folder, "is not empty; an export overwrites nothing; give another folder");
-        return Guard(folder, () => Guard(() => _database.Read(() => WriteExport(folder, progress, cancellation))));
+        return Guard(() => _database.Read(() => GuardFiles(folder, () => WriteExport(folder, progress, cancellation))));
     }
 
     private string WriteExport(string folder, IProgress<double>? progress, CancellationToken cancellation)

@@ -6,6 +6,9 @@ namespace ScopeReader.Archive;
 
 public sealed partial class MeasurementArchive
 {
+    private const string ReadingRows =
+        "SELECT q.name, r.channel, r.segment, r.value, r.unit, r.expanded, r.repeatability, r.method FROM reading r JOIN quantity q ON q.id = r.quantity WHERE r.entry = ?1 ";
+
     /// <summary>Finds entries.</summary>
     /// <exception cref="ArchiveException">The archive cannot be read.</exception>
     public Found Find(ArchiveQuery query)
@@ -36,7 +39,7 @@ public sealed partial class MeasurementArchive
                     });
                 }
             for (int i = 0; i < entries.Count; i++)
-                entries[i] = entries[i] with { Tags = TagsOf(entries[i].Number), Conditions = ConditionsOf(entries[i].Number), Readings = ReadingsOf(entries[i].Number) };
+                entries[i] = entries[i] with { Tags = TagsOf(entries[i].Number), Conditions = ConditionsOf(entries[i].Number), Readings = ReadingsOf(entries[i].Number, query.Quantities) };
             return new Found(matches, entries, Doubts(query));
         }));
     }
@@ -59,14 +62,14 @@ public sealed partial class MeasurementArchive
         return conditions;
     }
 
-    private List<FoundReading> ReadingsOf(int entry)
+    private List<FoundReading> ReadingsOf(int entry, IReadOnlyList<string>? quantities) => quantities is null
+        ? ReadingsOf(ReadingRows + "ORDER BY r.channel, r.segment, r.quantity", entry)
+        : [.. quantities.SelectMany(q => ReadingsOf(ReadingRows + "AND q.name = ?2 ORDER BY r.channel, r.segment", entry, q))];
+
+    private List<FoundReading> ReadingsOf(string sql, params ReadOnlySpan<object?> values)
     {
         var readings = new List<FoundReading>();
-        using SqliteDataReader row = _database.Rows(
-            """
-            SELECT q.name, r.channel, r.segment, r.value, r.unit, r.expanded, r.repeatability, r.method
-            FROM reading r JOIN quantity q ON q.id = r.quantity WHERE r.entry = ?1 ORDER BY r.channel, r.segment, r.quantity
-            """, entry);
+        using SqliteDataReader row = _database.Rows(sql, values);
         while (row.Read())
             readings.Add(new FoundReading(row.GetString(0), row.GetString(1), row.GetInt32(2), row.GetDouble(3), row.GetString(4), row.GetDouble(5), row.GetDouble(6), row.GetString(7)));
         return readings;

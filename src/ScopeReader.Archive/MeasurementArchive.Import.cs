@@ -33,7 +33,7 @@ public sealed partial class MeasurementArchive
                 Remove(part);
                 string head;
                 using (MeasurementArchive archive = Open(part))
-                    head = archive.ReadExport(folder, progress, cancellation);
+                    head = GuardFiles(folder, () => archive.ReadExport(folder, progress, cancellation));
                 File.Move(part, path);
                 return head;
             }

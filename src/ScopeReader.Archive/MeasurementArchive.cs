@@ -85,11 +85,20 @@ public sealed partial class MeasurementArchive : IDisposable
     {
         try
         {
-            return work();
+            return GuardFiles(path, work);
         }
         catch (SqliteException fault)
         {
             throw ArchiveException.From(fault, path);
+        }
+    }
+
+    // Faults of files beside the archive: an export's folder.
+    private static T GuardFiles<T>(string path, Func<T> work)
+    {
+        try
+        {
+            return work();
         }
         catch (Exception fault) when (fault is IOException or UnauthorizedAccessException)
         {

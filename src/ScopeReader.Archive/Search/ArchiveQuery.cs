@@ -30,6 +30,9 @@ public sealed record ArchiveQuery
     /// <summary>These entries only; empty for all.</summary>
     public IReadOnlyList<int> Entries { get; init; } = [];
 
+    /// <summary>The readings to give with each entry, by quantity; null for all.</summary>
+    public IReadOnlyList<string>? Quantities { get; init; }
+
     /// <summary>How many entries to give at most, latest capture first.</summary>
     public int Limit { get; init; } = 100;
 }

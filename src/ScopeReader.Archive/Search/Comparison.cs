@@ -61,6 +61,11 @@ public sealed record Comparison
                 problem = $"expected a number with its unit after {sign}, such as 5 V, found \"{value}\"";
                 return false;
             }
+            if (quantity is not null && unit.Length == 0)
+            {
+                problem = $"expected a unit after the number, such as 3.3 V, found \"{value}\"";
+                return false;
+            }
             comparison = new Comparison(name, quantity is not null, magnitude, sign, any, unit);
             problem = "";
             return true;

@@ -46,8 +46,11 @@ internal sealed class Selection
             ? $"SELECT entry FROM reading WHERE quantity = (SELECT id FROM quantity WHERE name = {Value(comparison.Name)})"
             : $"SELECT entry FROM condition WHERE name = {Value(comparison.Name)}";
         string unit = $" AND unit = {Value(comparison.Unit)}";
-        // The operator is one of five texts of Comparison's own.
-        string bound = comparison.IsMagnitude
+        // The operator is one of five texts of Comparison's own. Equal means to twelve digits: prefixes spoil the last bit.
+        double slack = 1e-12 * Math.Abs(comparison.Value);
+        string bound = comparison.Operator == "="
+            ? $" AND {(comparison.IsMagnitude ? "abs(value)" : "value")} BETWEEN {Value(comparison.Value - slack)} AND {Value(comparison.Value + slack)}"
+            : comparison.IsMagnitude
             ? comparison.Operator is ">" or ">="
                 ? $" AND (value {comparison.Operator} {Value(comparison.Value)} OR value {Mirrored(comparison.Operator)} {Value(-comparison.Value)})"
                 : $" AND abs(value) {comparison.Operator} {Value(comparison.Value)}"

@@ -28,6 +28,20 @@ internal static class CaptureMeasurer
         }
     }
 
+    /// <summary>Measures bytes that are in memory.</summary>
+    /// <param name="bytes">A file's bytes.</param>
+    /// <param name="file">Its name.</param>
+    /// <param name="plan">The plan, with what the command line says in it.</param>
+    /// <param name="channel">Measure only this channel; null for all.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <returns>The measurement, and how the bytes were read.</returns>
+    /// <exception cref="ImportException">They are no capture.</exception>
+    public static (Measurement Measurement, ImportReport Report) Measure(byte[] bytes, string file, Plan plan, string? channel, CancellationToken cancellation)
+    {
+        CaptureFile read = CaptureReader.Read(new MemoryStream(bytes, writable: false), file, plan.Import, plan.Chain.Scale, cancellation);
+        return (Analysis.Measure(Chosen(read.Capture, file, plan, channel), plan, null, cancellation), read.Report);
+    }
+
     /// <summary>Measures several files, at most so many at a time.</summary>
     /// <param name="files">The files.</param>
     /// <param name="measure">Measures one.</param>
@@ -52,9 +66,11 @@ internal static class CaptureMeasurer
         }
     }
 
-    private static Capture Read(string file, Plan plan, string? channel, CancellationToken cancellation)
+    private static Capture Read(string file, Plan plan, string? channel, CancellationToken cancellation) =>
+        Chosen(CaptureReader.Read(file, plan.Import, plan.Chain.Scale, cancellation).Capture, file, plan, channel);
+
+    private static Capture Chosen(Capture capture, string file, Plan plan, string? channel)
     {
-        Capture capture = CaptureReader.Read(file, plan.Import, plan.Chain.Scale, cancellation).Capture;
         if (channel is not null)
         {
             Channel[] chosen = [.. capture.Channels.Where(c => c.Name == channel)];

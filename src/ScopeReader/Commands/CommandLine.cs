@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.CommandLine.Help;
+using ScopeReader.Commands.Archive;
 using ScopeReader.Commands.Tables;
 using ScopeReader.Files.Plans;
 
@@ -75,6 +76,8 @@ internal static class CommandLine
         root.Subcommands.Add(MeasureVerb.Create(surroundings));
         root.Subcommands.Add(InspectVerb.Create(surroundings));
         root.Subcommands.Add(ExplainVerb.Create(surroundings));
+        root.Subcommands.Add(SeriesVerb.Create(surroundings));
+        root.Subcommands.Add(ArchiveVerb.Create(surroundings));
         root.SetAction(parsed =>
         {
             string[] named = parsed.GetValue(files) ?? [];

@@ -21,6 +21,24 @@ internal sealed class HelpByExample(Surroundings surroundings) : SynchronousComm
             "scopereader measure captures-demo/no-interval.csv --interval 20ns --json",
         ],
         ["inspect"] = [$"scopereader inspect {Export}", "scopereader inspect captures-demo/*.csv --json"],
+        ["series"] =
+        [
+            "scopereader series a.csv b.csv c.csv --against supply --at 4.5V,5V,5.5V --nominal 455kHz --within 20ppm",
+            "scopereader series --subject 'IF source*' --against load-capacitance",
+        ],
+        ["archive"] = [$"scopereader archive add {Source} --plan {Plan}", "scopereader archive find --where 'frequency-error > 20 ppm'", "scopereader archive verify"],
+        ["add"] = [$"scopereader archive add {Source} --plan {Plan} --set supply=5V --tag soldered"],
+        ["find"] = ["scopereader archive find --subject 'IF source*' --where '|frequency-error| > 20 ppm'", "scopereader archive find --since 2026-01-01 --verdict fail --json"],
+        ["show"] = ["scopereader archive show 12"],
+        ["amend"] = ["scopereader archive amend 12 --serial A-0012 --set supply=5.1V --reason 'label misread'"],
+        ["trend"] = ["scopereader archive trend frequency-error --subject 'IF source*'", "scopereader archive trend frequency-error --against supply"],
+        ["remeasure"] = ["scopereader archive remeasure 12", "scopereader archive remeasure --since 2025-01-01 --keep --reason 'new release'"],
+        ["extract"] = ["scopereader archive extract 12 --output original.csv"],
+        ["export"] = ["scopereader archive export archive-2026"],
+        ["import"] = ["scopereader archive import archive-2026 --archive rebuilt.db"],
+        ["verify"] = ["scopereader archive verify --head 3f1c…"],
+        ["backup"] = ["scopereader archive backup /media/copy/archive.db"],
+        ["stats"] = ["scopereader archive stats"],
         ["explain"] = ["scopereader explain frequency-error", "scopereader explain plan", "scopereader explain"],
     };
 
@@ -36,7 +54,7 @@ internal sealed class HelpByExample(Surroundings surroundings) : SynchronousComm
         sheet.Heading("Usage");
         if (isRoot)
             sheet.Indented("scopereader VERB FILE… [options]");
-        sheet.Indented(string.Join(' ', ((string[])["scopereader", isRoot ? "" : command.Name, .. command.Arguments.Select(Named), "[options]"]).Where(w => w.Length > 0)));
+        sheet.Indented(string.Join(' ', ((string[])["scopereader", isRoot ? "" : Path(command), .. command.Arguments.Select(Named), "[options]"]).Where(w => w.Length > 0)));
 
         sheet.Heading("Examples");
         foreach (string example in Examples[isRoot ? "" : command.Name])
@@ -75,6 +93,8 @@ internal sealed class HelpByExample(Surroundings surroundings) : SynchronousComm
         string name = argument.Arity.MaximumNumberOfValues > 1 ? argument.Name + "…" : argument.Name;
         return argument.Arity.MinimumNumberOfValues == 0 ? $"[{name}]" : name;
     }
+
+    private static string Path(Command command) => string.Join(' ', command.Parents.OfType<Command>().Where(c => c is not RootCommand).Append(command).Select(c => c.Name));
 
     private static string Capitalised(string text) => char.ToUpperInvariant(text[0]) + text[1..] + (text.EndsWith('.') ? "" : ".");
 }

@@ -1,5 +1,6 @@
 using System.CommandLine;
 using System.Globalization;
+using ScopeReader.Commands.Archive;
 
 namespace ScopeReader.Commands;
 
@@ -17,12 +18,13 @@ internal static class MeasureVerb
         Option<bool> explain = PlanOptions.Flag("--explain", "show each reading's uncertainty budget");
         Option<bool> json = PlanOptions.Flag("--json", "one JSON document"), jsonl = PlanOptions.Flag("--jsonl", "a JSON object a line, as the files finish");
         Option<bool> csv = PlanOptions.Flag("--csv", "CSV, a row a reading"), quiet = PlanOptions.Flag("--quiet", "the verdicts only, a line each");
-        Option<bool> noColour = CommandLine.NoColour();
+        Option<bool> noColour = CommandLine.NoColour(), keep = PlanOptions.Flag("--keep", "keep the captures in the archive too, as archive add does");
+        Option<string?> archive = ArchiveCommand.Path();
 
         var command = new Command("measure", "read, measure and judge captures");
         command.Arguments.Add(files);
         plan.AddTo(command);
-        foreach (Option option in (Option[])[channel, explain, json, jsonl, csv, quiet, noColour, jobs])
+        foreach (Option option in (Option[])[channel, explain, json, jsonl, csv, quiet, noColour, jobs, keep, archive])
             command.Options.Add(option);
 
         command.SetAction((parsed, cancellation) =>
@@ -43,6 +45,10 @@ internal static class MeasureVerb
                 [_] => new QuietOutput(run),
                 _ => new TableOutput(run),
             };
+            if (parsed.GetValue(keep))
+                return KeepRun.Measure(run, named, plan.Text(parsed), ArchiveCommand.PathOf(parsed, archive), output, cancellation);
+            if (parsed.GetValue(archive) is not null)
+                throw new UsageException("--archive says where --keep keeps; add --keep or leave it out");
             return run.Measure(named, Jobs(parsed.GetValue(jobs)), output, cancellation);
         });
         return command;

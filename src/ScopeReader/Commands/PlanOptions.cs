@@ -39,6 +39,22 @@ internal sealed class PlanOptions
         };
     }
 
+    /// <summary>The plan's text, to be kept with what was measured; null without a plan.</summary>
+    /// <exception cref="PlanException">The plan is missing.</exception>
+    public string? Text(ParseResult parsed)
+    {
+        if (parsed.GetValue(_plan) is not { } file)
+            return null;
+        try
+        {
+            return File.ReadAllText(file);
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            throw new PlanException(file, null, $"the plan could not be read: {e.Message}");
+        }
+    }
+
     /// <summary>An option that takes a value.</summary>
     public static Option<string?> Value(string name, string value, string description) => new(name) { HelpName = value, Description = description, Arity = ArgumentArity.ExactlyOne };
 

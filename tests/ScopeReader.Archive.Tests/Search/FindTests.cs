@@ -103,6 +103,7 @@ public sealed class FindTests : IDisposable
     [InlineData("frequency-error", "expected a comparison such as \"frequency-error > 20 ppm\", found \"frequency-error\"")]
     [InlineData("frequency-error > 20 Hz", "expected a value in ppm, such as 25 ppm, found \"20 Hz\"")]
     [InlineData("> 20 ppm", "expected a quantity or a condition before >, found \"> 20 ppm\"")]
+    [InlineData("high-level > 3", "expected a unit after the number, such as 3.3 V, found \"3\"")]
     [InlineData("supply > five", "expected a number with its unit after >, such as 5 V, found \"five\"")]
     public void A_comparison_that_does_not_read_says_what_is_wrong(string text, string problem)
     {

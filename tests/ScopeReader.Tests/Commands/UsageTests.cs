@@ -6,7 +6,7 @@ public class UsageTests
     [Theory]
     [InlineData("scopereader: unknown verb \"mesure\"; the nearest is measure", "mesure", "a.csv")]
     [InlineData("scopereader: unknown option \"--jsn\"; the nearest is --json", "measure", "--jsn", "a.csv")]
-    [InlineData("scopereader: unknown option \"--keep\"; the nearest is --help", "measure", "a.csv", "--keep")]
+    [InlineData("scopereader: unknown option \"--keep\"; the nearest is --help", "inspect", "a.csv", "--keep")]
     [InlineData("scopereader: unknown option \"--plam\"; the nearest is --plan", "a.csv", "--plam=b")]
     [InlineData("scopereader: measure needs a file: scopereader measure FILE", "measure")]
     [InlineData("scopereader: inspect needs a file: scopereader inspect FILE", "inspect", "--json")]
