@@ -20,7 +20,7 @@ internal static class BenchApp
         {
             string why = terminal is "dumb" ? "TERM is dumb" : "standard input and output are not one";
             Console.Error.WriteLine($"scopereader: the bench needs a terminal, and here {why}; measure on the command line instead: scopereader measure {(files.Count > 0 ? "FILE…" : "--help")}");
-            return ExitStatus.WrongPlace;
+            return ExitStatus.Usage;
         }
         bool mono = noColour || Environment.GetEnvironmentVariable("NO_COLOR") is { Length: > 0 };
         return RunInTerminal(files, plan, planPath, mono);

@@ -16,6 +16,16 @@ internal delegate int OpenBench(IReadOnlyList<string> files, Plan plan, string? 
 /// <summary>The command line: from arguments to an exit status.</summary>
 internal static class CommandLine
 {
+    // In the order of the help, which wants an example of each in HelpByExample.
+    private static readonly Func<Surroundings, Command>[] Verbs =
+    [
+        MeasureVerb.Create,
+        InspectVerb.Create,
+        SeriesVerb.Create,
+        ArchiveVerb.Create,
+        ExplainVerb.Create,
+    ];
+
     /// <summary>Name and version, as outputs carry them.</summary>
     public static string ProgramAndVersion { get; } = $"scopereader {typeof(CommandLine).Assembly.GetName().Version!.ToString(3)}";
 
@@ -73,17 +83,9 @@ internal static class CommandLine
         root.Arguments.Add(files);
         options.AddTo(root);
         root.Options.Add(noColour);
-        root.Subcommands.Add(MeasureVerb.Create(surroundings));
-        root.Subcommands.Add(InspectVerb.Create(surroundings));
-        root.Subcommands.Add(ExplainVerb.Create(surroundings));
-        root.Subcommands.Add(SeriesVerb.Create(surroundings));
-        root.Subcommands.Add(ArchiveVerb.Create(surroundings));
-        root.SetAction(parsed =>
-        {
-            string[] named = parsed.GetValue(files) ?? [];
-            CheckVerb(named, root);
-            return bench(named, options.Read(parsed, surroundings.Today), parsed.GetValue(options.Plan), parsed.GetValue(noColour));
-        });
+        foreach (Func<Surroundings, Command> verb in Verbs)
+            root.Subcommands.Add(verb(surroundings));
+        root.SetAction(parsed => bench(parsed.GetValue(files) ?? [], options.Read(parsed, surroundings.Today), parsed.GetValue(options.Plan), parsed.GetValue(noColour)));
 
         root.Directives.Clear();
         foreach (Option built in root.Options.Where(o => o is HelpOption or VersionOption).ToArray())
@@ -95,16 +97,6 @@ internal static class CommandLine
 
     /// <summary>The option that takes the colours away.</summary>
     public static Option<bool> NoColour() => PlanOptions.Flag("--no-colour", "no colours; NO_COLOR in the environment does the same", "--no-color");
-
-    // Without a verb the first word is a file; a mistyped verb must not end up as one that is not there.
-    private static void CheckVerb(string[] named, RootCommand root)
-    {
-        if (named.Length == 0 || Path.Exists(named[0]))
-            return;
-        string nearest = NearestWord.Of(named[0], root.Subcommands.Select(c => c.Name))!;
-        if (NearestWord.Distance(named[0], nearest) <= 2)
-            throw new UsageException($"unknown verb \"{named[0]}\"; the nearest is {nearest}");
-    }
 
     private sealed class VersionAction : System.CommandLine.Invocation.SynchronousCommandLineAction
     {

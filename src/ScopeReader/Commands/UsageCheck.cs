@@ -10,6 +10,8 @@ internal static class UsageCheck
     /// <exception cref="UsageException">The command line is wrong.</exception>
     public static void Check(ParseResult parsed)
     {
+        if (IsMistakenForVerb(parsed, out string mistaken))
+            throw new UsageException(UnknownVerb(mistaken, parsed.CommandResult.Command));
         if (StrayOption(parsed) is { } option)
             throw new UsageException($"unknown option \"{option}\"; the nearest is {NearestWord.Of(option, Options(parsed))}");
         if (OptionWithoutValue(parsed) is { } hungry)
@@ -18,6 +20,25 @@ internal static class UsageCheck
             throw new UsageException($"unexpected \"{word}\" after {parsed.CommandResult.Command.Name}");
         if (parsed.Errors is [var error, ..])
             throw new UsageException(Words(error, parsed.CommandResult.Command));
+    }
+
+    // Without a verb the first word is a file; a mistyped verb must not end up as one that is not there. A name with a dot
+    // or a slash is a file's for certain: the bench tells that it is missing.
+    private static bool IsMistakenForVerb(ParseResult parsed, out string word)
+    {
+        bool isRoot = parsed.CommandResult.Command is RootCommand;
+        IEnumerable<string> words = isRoot ? parsed.CommandResult.Children.OfType<ArgumentResult>().SelectMany(a => a.Tokens).Select(t => t.Value) : parsed.UnmatchedTokens;
+        word = words.FirstOrDefault("");
+        return parsed.CommandResult.Command.Subcommands.Count > 0 && word.Length > 0 && word[0] != '-'
+            && (!isRoot || (word.All(c => char.IsAsciiLetter(c) || c == '-') && !Path.Exists(word)));
+    }
+
+    private static string UnknownVerb(string word, Command command)
+    {
+        string nearest = NearestWord.Of(word, command.Subcommands.Select(c => c.Name))!;
+        bool isNear = NearestWord.Distance(word, nearest) <= 2 && 2 * NearestWord.Distance(word, nearest) < word.Length;
+        string help = command is RootCommand ? "scopereader --help" : $"scopereader {command.Name} --help";
+        return $"unknown verb \"{word}\"; {(isNear ? $"the nearest is {nearest}" : $"{help} lists the verbs")}";
     }
 
     // The parser takes an option that it does not know for a file's name. After -- it is one.

@@ -5,6 +5,11 @@ public class UsageTests
 {
     [Theory]
     [InlineData("scopereader: unknown verb \"mesure\"; the nearest is measure", "mesure", "a.csv")]
+    [InlineData("scopereader: unknown verb \"publish\"; scopereader --help lists the verbs", "publish", "a.csv")]
+    [InlineData("scopereader: unknown verb \"publish\"; scopereader --help lists the verbs", "publish", "a.csv", "--output", "b")]
+    [InlineData("scopereader: unknown verb \"fnd\"; the nearest is find", "archive", "fnd", "--json")]
+    [InlineData("scopereader: unknown verb \"burn\"; scopereader archive --help lists the verbs", "archive", "burn")]
+    [InlineData("scopereader: archive needs a verb: add, find, show, amend, trend, remeasure, extract, export, import, verify, backup, stats", "archive")]
     [InlineData("scopereader: unknown option \"--jsn\"; the nearest is --json", "measure", "--jsn", "a.csv")]
     [InlineData("scopereader: unknown option \"--keep\"; the nearest is --help", "inspect", "a.csv", "--keep")]
     [InlineData("scopereader: unknown option \"--plam\"; the nearest is --plan", "a.csv", "--plam=b")]

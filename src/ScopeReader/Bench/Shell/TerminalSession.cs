@@ -47,7 +47,7 @@ internal static class TerminalSession
             Console.Error.WriteLine($"scopereader: a fault of this program, please report it: {exception}");
             return ExitStatus.Fault;
         }
-        return guard.Status ?? ExitStatus.Done;
+        return guard.Status ?? ExitStatus.Passed;
     }
 
     private static Capture Read(string path, Plan plan, CancellationToken cancellation) => path == "-"
