@@ -1,4 +1,5 @@
 using ScopeReader.Captures;
+using ScopeReader.Edges;
 using ScopeReader.Limits;
 using ScopeReader.Readings;
 
@@ -22,16 +23,17 @@ public static class Analysis
         {
             cancellation.ThrowIfCancellationRequested();
             var sheet = new ReadingSheet();
+            IReadOnlyList<MeasuredEdge> edges = [];
             switch (channel)
             {
                 case Waveform waveform:
-                    WaveformAnalysis.Measure(new WaveformJob(waveform, plan, new ChainErrors(plan, waveform.Axis), sheet, cancellation));
+                    edges = WaveformAnalysis.Measure(new WaveformJob(waveform, plan, new ChainErrors(plan, waveform.Axis), sheet, cancellation));
                     break;
                 case SpectrumTrace trace:
                     SpectrumAnalysis.Measure(trace, plan, sheet);
                     break;
             }
-            channels.Add(new ChannelMeasurement(channel, sheet.Readings, sheet.NotMeasured, sheet.Findings, Judge.Channel(plan, channel, sheet)));
+            channels.Add(new ChannelMeasurement(channel, sheet.Readings, sheet.NotMeasured, sheet.Findings, Judge.Channel(plan, channel, sheet)) { Edges = edges });
             progress?.Report((double)channels.Count / capture.Channels.Count);
         }
         return new Measurement(capture, channels, Cautions.For(capture, plan, channels), Summary(plan, channels));

@@ -1,4 +1,5 @@
 using ScopeReader.Captures;
+using ScopeReader.Edges;
 using ScopeReader.Limits;
 using ScopeReader.Readings;
 
@@ -30,7 +31,14 @@ public enum Outcome
 /// <param name="Findings">What the numbers say.</param>
 /// <param name="Verdicts">The limits that concern this channel, answered.</param>
 public sealed record ChannelMeasurement(Channel Channel, IReadOnlyList<Reading> Readings, IReadOnlyList<NotMeasured> NotMeasured,
-    IReadOnlyList<Finding> Findings, IReadOnlyList<Verdict> Verdicts);
+    IReadOnlyList<Finding> Findings, IReadOnlyList<Verdict> Verdicts)
+{
+    /// <summary>The averaged edges of a two-state waveform, the rising one first.</summary>
+    public IReadOnlyList<MeasuredEdge> Edges { get; init; } = [];
+
+    /// <summary>The primary reading of a quantity, or null.</summary>
+    public Reading? Primary(Quantity quantity) => Readings.FirstOrDefault(r => r.IsPrimary && r.Quantity == quantity);
+}
 
 /// <summary>What was found in one capture.</summary>
 /// <param name="Capture">The capture.</param>

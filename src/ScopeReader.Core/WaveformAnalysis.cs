@@ -11,7 +11,8 @@ namespace ScopeReader;
 public static class WaveformAnalysis
 {
     /// <summary>Runs every analyser that suits the waveform.</summary>
-    public static void Measure(WaveformJob job)
+    /// <returns>The averaged edges that could be made out, for what looks at their shape next.</returns>
+    public static IReadOnlyList<MeasuredEdge> Measure(WaveformJob job)
     {
         ArgumentNullException.ThrowIfNull(job);
         ReadOnlySpan<double> samples = job.Waveform.Samples;
@@ -20,7 +21,7 @@ public static class WaveformAnalysis
         {
             job.Sheet.Refuse("out-of-range", "values or times lie beyond anything a bench can have; check the file's units and the plan's scale",
                 [.. Quantities.All.Where(q => q.Kinds.HasFlag(CaptureKinds.Waveform))]);
-            return;
+            return [];
         }
         WaveShape shape = WaveShapeAnalyser.Look(samples);
         job.Cancellation.ThrowIfCancellationRequested();
@@ -41,6 +42,7 @@ public static class WaveformAnalysis
         RingingAnalyser.Measure(job, edges);
         job.Cancellation.ThrowIfCancellationRequested();
         HarmonicAnalyser.Measure(job, frequency?.Primary);
+        return edges;
     }
 
     // Squares and reciprocals of what passes here stay far inside a double.

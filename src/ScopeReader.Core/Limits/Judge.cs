@@ -75,7 +75,7 @@ public static class Judge
     private static bool IsUnstated(Reading reading) => reading is { Quantity.Unit: "V", Unit: "" } or { Quantity.Unit: "V/s", Unit: "/s" };
 
     private static string Unstated(Budget budget) =>
-        "not stated in the plan: " + string.Join(", ", budget.Missing.Select(name => $"{name} (add {PlanKeys.For(name)} to [chain])"));
+        "not stated in the plan: " + string.Join(", ", budget.Missing.Select(name => $"{name} (add {PlanKeys.For(name)} to {PlanKeys.TableOf(name)})"));
 
     // A longer record shrinks the capture's own part only.
     private static string WhatWouldDecide(Budget budget, double value, double low, double high, double factor, double guard)

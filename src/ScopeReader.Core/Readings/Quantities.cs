@@ -105,6 +105,17 @@ public static class Quantities
     /// <summary>Amplitude of the ringing.</summary>
     public static Quantity RingingAmplitude { get; } = new("ringing-amplitude", "%", "envelope of the oscillation, carried back to the 50 % instant, of amplitude", SecondOrder, Waveform);
 
+    private const string Loop = "undamped frequency 1/(2 pi sqrt(LC))";
+
+    /// <summary>Inductance that rings.</summary>
+    public static Quantity RingingInductance { get; } = new("ringing-inductance", "H", "inductance of the loop that rings, from a stated capacitance or an added capacitor", Loop, Waveform);
+
+    /// <summary>Capacitance that rings.</summary>
+    public static Quantity RingingCapacitance { get; } = new("ringing-capacitance", "F", "capacitance of the node that rings, from the frequencies without and with an added capacitor", Loop, Waveform);
+
+    /// <summary>Resistance that damps the ringing.</summary>
+    public static Quantity DampingResistance { get; } = new("damping-resistance", "ohm", "resistance to add in series for a damping ratio of 0.5", "2 z sqrt(L/C)", Waveform);
+
     /// <summary>Level of the fundamental.</summary>
     public static Quantity FundamentalLevel { get; } = new("fundamental-level", "dBV", "rms level of the fundamental, relative to 1 V", Common, Waveform);
 
@@ -136,7 +147,7 @@ public static class Quantities
         HighLevel, LowLevel, Amplitude, PeakToPeak, Mean, Rms,
         RiseTime, FallTime, RiseSlew, FallSlew, RiseOvershoot, FallOvershoot, RiseUndershoot, FallUndershoot,
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,
-        RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude,
+        RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude, RingingInductance, RingingCapacitance, DampingResistance,
         FundamentalLevel, FundamentalPower, .. HarmonicTable, WorstHarmonic, Thd, ThdR,
         PeakFrequency, PeakPower, PeakLevel,
     ];

@@ -14,7 +14,7 @@ namespace ScopeReader.Ringing;
 public static class RingingAnalyser
 {
     private static readonly Quantity[] All =
-        [Quantities.RingingFrequency, Quantities.RingingDampingRatio, Quantities.RingingQ, Quantities.RingingDecayTime, Quantities.RingingAmplitude];
+        [Quantities.RingingFrequency, Quantities.RingingDampingRatio, Quantities.RingingQ, Quantities.RingingDecayTime, Quantities.RingingAmplitude, .. LoopAnalyser.All];
 
     /// <summary>Measures the ringing after the edges.</summary>
     /// <param name="job">The job.</param>
@@ -36,7 +36,10 @@ public static class RingingAnalyser
                 continue;
             Report(job, edge, ringing, isPrimary);
             if (isPrimary)
+            {
                 RingingFindings.Ringing(job, edge);
+                LoopAnalyser.Measure(job);
+            }
             isPrimary = false;
         }
         if (isPrimary)

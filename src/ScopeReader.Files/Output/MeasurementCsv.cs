@@ -1,4 +1,3 @@
-using System.Globalization;
 using CsvHelper;
 using ScopeReader.Limits;
 using ScopeReader.Readings;
@@ -12,16 +11,7 @@ namespace ScopeReader.Files.Output;
 /// </remarks>
 public static class MeasurementCsv
 {
-    private static readonly CsvWriterOptions Options = new()
-    {
-        NewLine = "\n",
-        FormatProvider = CultureInfo.InvariantCulture,
-        Injection = CsvInjection.Escape,
-        // What starts a formula, also after characters that a spreadsheet drops from the start of a cell.
-        InjectionCharacters = "=+-@\t\r\n",
-        TrueValue = "true",
-        FalseValue = "false",
-    };
+    private static readonly CsvWriterOptions Options = SpreadsheetOptions.Create();
 
     /// <summary>Writes the header row.</summary>
     /// <param name="output">Where the row goes.</param>

@@ -45,7 +45,7 @@ public sealed class MeasurementJson(string program, bool explain)
         return JsonSerializer.Serialize(Capture(file, explain), OneLine.CaptureObject);
     }
 
-    private static CaptureObject Capture(MeasuredFile file, bool explain) => file.Measurement is { } m
+    internal static CaptureObject Capture(MeasuredFile file, bool explain) => file.Measurement is { } m
         ? new CaptureObject(file.File, m.Capture.Sha256, file.Error, m.Cautions, m.Capture.Doubts, [.. m.Channels.Select(c => Channel(c, explain))])
         : new CaptureObject(file.File, null, file.Error, [], [], []);
 
@@ -77,7 +77,7 @@ public sealed class MeasurementJson(string program, bool explain)
         return step;
     }
 
-    private static ReadingObject Reading(Reading reading, bool explain)
+    internal static ReadingObject Reading(Reading reading, bool explain)
     {
         Budget budget = reading.Budget;
         return new ReadingObject(reading.Quantity.Id, reading.Value, reading.Unit, Finite(budget.StandardUncertainty), Finite(budget.ExpandedUncertainty),

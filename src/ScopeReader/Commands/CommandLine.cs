@@ -21,6 +21,7 @@ internal static class CommandLine
     [
         MeasureVerb.Create,
         InspectVerb.Create,
+        CompareVerb.Create,
         SeriesVerb.Create,
         ArchiveVerb.Create,
         ExplainVerb.Create,

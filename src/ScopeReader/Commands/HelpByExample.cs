@@ -21,6 +21,12 @@ internal sealed class HelpByExample(Surroundings surroundings) : SynchronousComm
             "scopereader measure captures-demo/no-interval.csv --interval 20ns --json",
         ],
         ["inspect"] = [$"scopereader inspect {Export}", "scopereader inspect captures-demo/*.csv --json"],
+        ["compare"] =
+        [
+            "scopereader compare captures-demo/node-breadboard.csv captures-demo/node-soldered.csv --plan captures-demo/node.toml",
+            "scopereader compare before-1.csv before-2.csv before-3.csv --with after-1.csv after-2.csv after-3.csv",
+            "scopereader compare bare.csv with-47pF.csv --added 47pF --added-tolerance 5%",
+        ],
         ["series"] =
         [
             "scopereader series a.csv b.csv c.csv --against supply --at 4.5V,5V,5.5V --nominal 455kHz --within 20ppm",

@@ -25,12 +25,17 @@ internal sealed class PlanOptions
     /// <summary>The plan, with what the command line says in it.</summary>
     /// <exception cref="UsageException">An option's value is wrong.</exception>
     /// <exception cref="PlanException">The plan is wrong or missing.</exception>
-    public Plan Read(ParseResult parsed, DateOnly today)
+    public Plan Read(ParseResult parsed, DateOnly today) => Read(parsed, today, parsed.GetValue(_plan));
+
+    /// <summary>Another plan's file with the same options in it.</summary>
+    /// <exception cref="UsageException">An option's value is wrong.</exception>
+    /// <exception cref="PlanException">The plan is wrong or missing.</exception>
+    public Plan Read(ParseResult parsed, DateOnly today, string? file)
     {
         double? nominal = Positive(parsed, _nominal, "Hz"), interval = Positive(parsed, _interval, "s"), rate = Positive(parsed, _rate, "Hz");
         if (interval is not null && rate is not null)
             throw new UsageException("--interval and --rate say the same thing; keep one of them");
-        Plan plan = parsed.GetValue(_plan) is { } file ? PlanReader.ReadFile(file) : ScopeReader.Plan.Empty;
+        Plan plan = file is not null ? PlanReader.ReadFile(file) : ScopeReader.Plan.Empty;
         return plan with
         {
             Nominal = nominal ?? plan.Nominal,

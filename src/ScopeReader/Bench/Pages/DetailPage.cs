@@ -64,7 +64,7 @@ internal static class DetailPage
         if (reading.Note is { Length: > 0 } note)
             lines.Add(new(note, Ink.Plain, "note"));
         foreach (string missing in budget.Missing)
-            lines.Add(new($"{missing}: not stated, so not in the interval; {PlanKeys.For(missing)} in the plan's [chain] states it", Ink.Undecided, "missing"));
+            lines.Add(new($"{missing}: not stated, so not in the interval; {PlanKeys.For(missing)} in the plan's {PlanKeys.TableOf(missing)} states it", Ink.Undecided, "missing"));
         lines.Add(new(""));
         lines.Add(new("Budget, largest first", Ink.Strong));
         foreach (BudgetTerm term in budget.Terms.OrderByDescending(t => t.Contribution))

@@ -30,7 +30,7 @@ internal sealed record ReadingRow(Quantity Quantity, Reading? Reading, Verdict? 
         if (Reading is { } reading)
         {
             if (Verdict is null && reading.Budget.Missing.Count > 0)
-                parts.Add($"as indicated: {string.Join(", ", reading.Budget.Missing.Select(m => $"{m} not stated ({PlanKeys.For(m)} in the plan's [chain])"))}");
+                parts.Add($"as indicated: {string.Join(", ", reading.Budget.Missing.Select(m => $"{m} not stated ({PlanKeys.For(m)} in the plan's {PlanKeys.TableOf(m)})"))}");
             parts.Add(reading.Count is { } n ? FormattableString.Invariant($"by {reading.Method}, n = {n}") : $"by {reading.Method}");
             if (reading.Note is { Length: > 0 } note)
                 parts.Add(note);

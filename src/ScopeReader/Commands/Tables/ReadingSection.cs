@@ -57,9 +57,12 @@ internal static class ReadingSection
 
     private static void WriteMissing(Sheet sheet, IReadOnlyList<Reading> readings)
     {
-        string[] missing = [.. readings.SelectMany(r => r.Budget.Missing).Distinct()];
-        if (missing.Length > 0)
-            sheet.Line($"without {string.Join(", ", missing)}: the plan does not state {(missing.Length == 1 ? "it" : "them")}, so these readings are as indicated and their ± leaves "
-                + $"{(missing.Length == 1 ? "it" : "them")} out. Add {string.Join(", ", missing.Select(PlanKeys.For))} to [chain].");
+        foreach (IGrouping<string, string> table in readings.SelectMany(r => r.Budget.Missing).Where(PlanKeys.IsInPlan).Distinct().GroupBy(PlanKeys.TableOf))
+        {
+            string[] missing = [.. table];
+            string them = missing.Length == 1 ? "it" : "them";
+            sheet.Line($"without {string.Join(", ", missing)}: the plan does not state {them}, so these readings are as indicated and their ± leaves {them} out. "
+                + $"Add {string.Join(", ", missing.Select(PlanKeys.For))} to {table.Key}.");
+        }
     }
 }
