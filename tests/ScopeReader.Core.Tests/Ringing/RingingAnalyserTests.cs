@@ -48,6 +48,27 @@ public class RingingAnalyserTests
     }
 
     [Fact]
+    public void Stated_capacitance_gives_the_inductance()
+    {
+        var plan = new Plan { Conditions = new Dictionary<string, Condition> { ["node-capacitance"] = new(20e-12, "F"), ["node-capacitance-tolerance"] = new(10, "%") } };
+        ReadingSheet sheet = Measure(plan, Ringing);
+        // L = 1/(4π² f0² C) with f0² = f² + (α/2π)²: 2 µH.
+        double f0 = double.Hypot(Frequency, 1 / (2 * Math.PI * Decay)), expected = 1 / (4 * Math.PI * Math.PI * f0 * f0 * 20e-12);
+        // Twice the 1e-4 of the frequency's own test.
+        Assert.Equal(expected, sheet.Value(Quantities.RingingInductance), 3e-4 * expected);
+        Assert.Equal("the plan states the node's capacitance; compare with --added measures it", sheet.NotMeasured.Single(n => n.Quantity == Quantities.RingingCapacitance).Reason);
+        // The capacitance's bound of 10 % is by far the widest term: at most that, and no less than 95 % of it.
+        Assert.InRange(sheet.Primary(Quantities.RingingInductance)!.Budget.ExpandedUncertainty, 0.095 * expected, 0.1 * expected);
+        Assert.Contains(sheet.Findings, f => f.Code == "ringing-loop");
+        Assert.Contains(sheet.Findings, f => f.Code == "ringing-cure");
+    }
+
+    [Fact]
+    public void Without_a_capacitance_there_is_no_inductance() =>
+        Assert.Equal("a frequency alone gives no inductance: state the node's capacitance as node-capacitance in [conditions], "
+            + "or capture again with a known capacitor across the node and compare the two with --added", Measure(Plan.Empty, Ringing).NotMeasured.Single(n => n.Quantity == Quantities.RingingInductance).Reason);
+
+    [Fact]
     public void Smooth_edge_does_not_ring()
     {
         ReadingSheet sheet = Measure(Plan.Empty, t => ScopeReader.Numerics.BoundedNormal.NormalCumulative(t / 3e-9));
