@@ -33,9 +33,9 @@ public static class WaveformAnalysis
 
         CrossingFrequency? crossings = CrossingFrequency.Measure(samples, transitions, low, high, noise, shape);
         MeasuredFrequency? frequency = FrequencyAnalyser.Measure(job, shape, crossings, transitions.Count);
+        job = job with { Fitness = new WaveFitness(frequency?.Steadiness, Clipping.Look(job, shape)) };
         WidthAnalyser.Measure(job, transitions, crossings, states is null ? noise / Math.Sqrt(samples.Length) : double.Hypot(states.LowUncertainty, states.HighUncertainty) / 2);
         LevelAnalyser.Measure(job, shape, noise, frequency is null ? null : 1 / frequency.Primary.CyclesPerSample);
-        Clipping.Look(job, shape);
         job.Cancellation.ThrowIfCancellationRequested();
 
         IReadOnlyList<MeasuredEdge> edges = EdgeAnalyser.Measure(job, states, shape.Step, transitions, frequency?.Grid);

@@ -36,6 +36,9 @@ public sealed class Waveform : Channel
     /// <summary>The samples, in <see cref="Channel.Unit"/>.</summary>
     public ReadOnlySpan<double> Samples => _samples.Span;
 
+    /// <summary>The same, to be shared among threads.</summary>
+    public ReadOnlyMemory<double> Memory => _samples;
+
     /// <summary>Sample interval, s, or 1 where none is known.</summary>
     public double Interval => Axis.Interval;
 

@@ -5,13 +5,16 @@ namespace ScopeReader.Frequency;
 /// <summary>The lines of a periodic wave, as far as a frequency estimate is disturbed by them.</summary>
 internal sealed class Comb
 {
-    private const int FewestHarmonics = 20, MostHarmonics = 64, HighestFolded = 1000;
-    private const double MostWork = 3e7;
+    private const int FewestHarmonics = 20, MostHarmonics = 64, HighestFolded = 1000, Inspected = 1 << 17;
+    private const double MostWork = 3e7, FewestCycles = 64;
 
     private readonly HarmonicModel _model;
     private readonly int _count;
 
     private Comb(HarmonicModel model, NoiseSpectrum noise, int count) => (_model, Noise, _count) = (model, noise, count);
+
+    /// <summary>The fitted lines; of a long record those in its middle.</summary>
+    public HarmonicModel Model => _model;
 
     /// <summary>What is left when the lines are taken out.</summary>
     public NoiseSpectrum Noise { get; }
@@ -27,12 +30,23 @@ internal sealed class Comb
     {
         // A harmonic within a cycle a record of half the sample rate cannot be told from its own image.
         int most = (int)((0.5 - 1.0 / samples.Length) / fundamental);
-        int affordable = (int)Math.Clamp(MostWork / samples.Length, FewestHarmonics, MostHarmonics);
-        int wanted = Math.Min(most, Math.Max(atLeast, Math.Min(affordable, samples.Length / 16)));
+        ReadOnlySpan<double> part = Middle(samples, fundamental);
+        int affordable = (int)Math.Clamp(MostWork / part.Length, FewestHarmonics, MostHarmonics);
+        int wanted = Math.Min(most, Math.Max(atLeast, Math.Min(affordable, part.Length / 16)));
         for (int harmonics = wanted; harmonics >= atLeast && harmonics > 0; harmonics = harmonics == wanted ? atLeast : 0)
-            if (HarmonicFit.At(samples, fundamental, harmonics) is { } fit)
-                return new Comb(fit.Model, new NoiseSpectrum(fit.Model.Residual(samples), fundamental, fit.Unknowns), samples.Length);
+            if (HarmonicFit.At(part, fundamental, harmonics) is { } fit)
+                return new Comb(fit.Model, new NoiseSpectrum(fit.Model.Residual(part), fundamental, fit.Unknowns), samples.Length);
         return null;
+    }
+
+    /// <summary>The middle of a long record: enough to know its lines and its noise by. Its middle is that of the record.</summary>
+    public static ReadOnlySpan<double> Middle(ReadOnlySpan<double> samples, double fundamental)
+    {
+        int length = (int)Math.Max(Inspected, Math.Min(samples.Length, Math.Ceiling(FewestCycles / fundamental)));
+        if (length >= samples.Length)
+            return samples;
+        length -= (samples.Length - length) % 2;
+        return samples.Slice((samples.Length - length) / 2, length);
     }
 
     /// <summary>Every line but one, images at negative frequencies too.</summary>

@@ -43,17 +43,29 @@ public static class FrequencyAnalyser
             job.Sheet.Refuse(code, reason, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError);
             return null;
         }
-        Add(job, primary, isPrimary: true, why);
-        foreach (FrequencyEstimate? other in (ReadOnlySpan<FrequencyEstimate?>)[crossings?.Estimate, line, sine])
+        Steadiness steadiness = Comb.Find(samples, primary.CyclesPerSample) is { } comb
+            ? SteadinessCheck.Look(job.Waveform.Memory, comb, primary.CyclesPerSample, crossings)
+            : new Steadiness(SteadinessKind.Untested);
+        if (SteadinessFindings.WhyNone(job, steadiness) is { } none)
+        {
+            job.Sheet.Refuse(SteadinessFindings.Code, none, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError);
+            return null;
+        }
+        FrequencyEstimate Widened(FrequencyEstimate estimate) => SteadinessFindings.Term(steadiness, estimate.CyclesPerSample, job.Waveform.Count) is { } term
+            ? estimate with { Terms = [.. estimate.Terms, term] } : estimate;
+        Add(job, Widened(primary), isPrimary: true, why);
+        foreach (FrequencyEstimate? other in (FrequencyEstimate?[])[crossings?.Estimate, line, sine])
             if (other is not null && other != primary)
             {
-                Add(job, other, isPrimary: false, note: null);
-                FrequencyFindings.Compare(job, primary, other);
+                Add(job, Widened(other), isPrimary: false, note: null);
+                FrequencyFindings.Compare(job, Widened(primary), Widened(other));
             }
+        primary = Widened(primary);
+        SteadinessFindings.Write(job, steadiness);
         AddPeriod(job, primary);
         AddError(job, primary);
         FrequencyFindings.Record(job, primary, crossings);
-        return new MeasuredFrequency(primary, crossings?.Grid);
+        return new MeasuredFrequency(primary, steadiness, crossings?.Grid);
     }
 
     private static (FrequencyEstimate? Primary, string Why) Choose(WaveShape shape, FrequencyEstimate? crossings, FrequencyEstimate? line, FrequencyEstimate? sine, int edges)

@@ -26,7 +26,7 @@ internal static class FrequencyFindings
         if (cycles < FewCycles)
             job.Sheet.Add(new Finding("few-cycles", string.Create(CultureInfo.InvariantCulture,
                 $"{cycles:0.0} cycles in the record: the frequency rests on little; ten times the record makes it about thirty times as certain")));
-        if (crossings is { CommensurateMultiple: > 0 } && primary == crossings.Estimate)
+        if (crossings is { CommensurateMultiple: > 0 } && primary.Method == CrossingFrequency.Method)
             Commensurate(job, crossings, cycles);
         if (job.Plan.Chain.ProbeCapacitance is { } capacitance and > 0)
             job.Sheet.Add(new Finding("probe-loading",

@@ -16,18 +16,20 @@ internal static class Clipping
     /// <summary>Writes a finding where a rail shows.</summary>
     /// <param name="job">The waveform and where findings go.</param>
     /// <param name="shape">What the first look gave.</param>
-    public static void Look(WaveformJob job, WaveShape shape)
+    /// <returns>The ends that cut the wave off.</returns>
+    public static ClippedEnds Look(WaveformJob job, WaveShape shape)
     {
         if (shape.Kind == WaveKind.Flat)
-            return;
+            return ClippedEnds.None;
         bool top = IsRail(job.Waveform.Samples, shape, shape.Maximum, +1), bottom = IsRail(job.Waveform.Samples, shape, shape.Minimum, -1);
         if (!top && !bottom)
-            return;
+            return ClippedEnds.None;
         string where = top && bottom ? "top and bottom look" : top ? "the top looks" : "the bottom looks";
         string unit = job.Waveform.Unit;
         string at = top && bottom ? $"{Engineering.Format(shape.Maximum, unit)} and {Engineering.Format(shape.Minimum, unit)}" : Engineering.Format(top ? shape.Maximum : shape.Minimum, unit);
         job.Sheet.Add(new Finding("clipping-suspected",
             $"{where} cut off at {at}: samples stay there and crowd; levels, overshoot and harmonics may be the instrument's; use a larger vertical range", top && bottom ? "both" : top ? "top" : "bottom"));
+        return (top ? ClippedEnds.Top : 0) | (bottom ? ClippedEnds.Bottom : 0);
     }
 
     private static bool IsRail(ReadOnlySpan<double> samples, WaveShape shape, double rail, int sign)

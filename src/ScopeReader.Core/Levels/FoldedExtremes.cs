@@ -14,6 +14,9 @@ internal static class FoldedExtremes
     // The window reaches down to this share of peak-to-peak below the extreme; the polynomial follows a sine or a ringing so far.
     private const double Depth = 0.04, WidestShare = 0.1, Agreement = 2, Rise = 1.5, Grid = 0.01;
 
+    // Noise of a twelfth of the swing stays below this; steep edges in wide bins do not, and no extreme is read off them.
+    private const double StrayShare = 0.5;
+
     /// <summary>An extreme, its standard uncertainty from noise, and a bound of what the polynomial misses.</summary>
     public readonly record struct Extreme(double Value, double Uncertainty, double Bound);
 
@@ -27,18 +30,52 @@ internal static class FoldedExtremes
             return null;
         ReadOnlySpan<double> used = samples[..(int)Math.Min(samples.Length, Math.Ceiling(periods * period))];
         int bins = Math.Clamp(used.Length / SamplesPerBin, FewestBins, MostBins);
+        double[] sums = Averages(used, period, bins);
+        double swing = sums.Where(double.IsFinite).Max() - sums.Where(double.IsFinite).Min();
+        if (WithoutStrays(used, period, sums, StrayShare * swing) is { } rest)
+        {
+            used = rest;
+            sums = Averages(used, period, bins);
+        }
+        double highest = sums.Where(double.IsFinite).Max(), lowest = sums.Where(double.IsFinite).Min();
+        return (Top(used, period, sums, highest, highest - lowest, 1), Top(used, period, sums, -lowest, highest - lowest, -1), periods);
+    }
+
+    private static double[] Averages(ReadOnlySpan<double> samples, double period, int bins)
+    {
         double[] sums = new double[bins], counts = new double[bins];
-        for (int i = 0; i < used.Length; i++)
+        for (int i = 0; i < samples.Length; i++)
         {
             int bin = (int)(Phase(i, period) * bins);
-            sums[bin] += used[i];
+            sums[bin] += samples[i];
             counts[bin]++;
         }
         for (int b = 0; b < bins; b++)
             // A period that is nearly a whole number of samples leaves bins empty.
             sums[b] = counts[b] > 0 ? sums[b] / counts[b] : double.NaN;
-        double highest = sums.Where(double.IsFinite).Max(), lowest = sums.Where(double.IsFinite).Min();
-        return (Top(used, period, sums, highest, highest - lowest, 1), Top(used, period, sums, -lowest, highest - lowest, -1), periods);
+        return sums;
+    }
+
+    // A copy in which samples far from their place in the period have its value; null where there are none. The middle one of
+    // three neighbouring averages: a stray can have spoilt one of them.
+    private static double[]? WithoutStrays(ReadOnlySpan<double> samples, double period, double[] averages, double limit)
+    {
+        int bins = averages.Length;
+        var usual = new double[bins];
+        int[] filled = [.. Enumerable.Range(0, bins).Where(b => double.IsFinite(averages[b]))];
+        for (int f = 0; f < filled.Length; f++)
+        {
+            double before = averages[filled[(f + filled.Length - 1) % filled.Length]], own = averages[filled[f]], after = averages[filled[(f + 1) % filled.Length]];
+            usual[filled[f]] = Math.Max(Math.Min(before, own), Math.Min(Math.Max(before, own), after));
+        }
+        double[]? copy = null;
+        for (int i = 0; i < samples.Length; i++)
+        {
+            double place = usual[(int)(Phase(i, period) * bins)];
+            if (Math.Abs(samples[i] - place) > limit)
+                (copy ??= samples.ToArray())[i] = place;
+        }
+        return copy;
     }
 
     private static double Phase(int i, double period)

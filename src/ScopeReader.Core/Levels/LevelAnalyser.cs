@@ -39,6 +39,11 @@ public static class LevelAnalyser
             double cut = periods == 1 ? (shape.Maximum - shape.Minimum) / (4 * p) : 0;
             AddMeanAndRms(job, mean, square, noise, bound, cut, periods, periods == 1 ? "over one period" : $"over {periods} periods");
         }
+        else if (shape.Kind is WaveKind.TwoState or WaveKind.Sinusoidal)
+        {
+            job.Sheet.Refuse("no-whole-period", "the record holds no whole period that was found, and over a part of one mean and rms depend on where it was cut; capture two periods or more",
+                Quantities.Mean, Quantities.Rms);
+        }
         else
         {
             AddOverRecord(job, shape, noise);
@@ -106,6 +111,9 @@ public static class LevelAnalyser
                 Count = found.Periods,
                 Note = "of the wave folded on its period",
             });
+            // The parts of an unsteady wave differ from their average, and none of that is a spike.
+            if (job.Fitness.IsSteady)
+                Strays.Look(job, shape, noise, found.Highest.Value, found.Lowest.Value);
             return;
         }
         // Without a period the extremes are single samples, each as uncertain as a sample.

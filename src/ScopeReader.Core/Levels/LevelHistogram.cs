@@ -41,13 +41,15 @@ internal sealed class LevelHistogram
     }
 
     /// <summary>The two sides of the wave: the bin that parts them lies half-way between their medians.</summary>
-    public int Divide()
+    /// <param name="first">First bin that counts.</param>
+    /// <param name="last">Last bin that counts, above the first.</param>
+    public int Divide(int first, int last)
     {
-        int middle = (Bins - 1) / 2;
+        int middle = (first + last) / 2;
         for (int i = 0; i < 20; i++)
         {
-            int next = (int)Math.Floor((Median(0, middle) + Median(middle + 1, Bins - 1)) / 2);
-            next = Math.Clamp(next, 0, Bins - 2);
+            int next = (int)Math.Floor((Median(first, middle) + Median(middle + 1, last)) / 2);
+            next = Math.Clamp(next, first, last - 1);
             if (next == middle)
                 break;
             middle = next;
@@ -94,6 +96,18 @@ internal sealed class LevelHistogram
                 return d * _width;
         }
         return 0;
+    }
+
+    /// <summary>The bins that are left when a share of the samples is taken off either end.</summary>
+    public (int First, int Last) Within(double share)
+    {
+        long all = Count(0, Bins - 1), most = (long)(share * all);
+        int first = 0, last = Bins - 1;
+        for (long outside = _counts[first]; outside <= most && first < last; outside += _counts[first])
+            first++;
+        for (long outside = _counts[last]; outside <= most && last > first; outside += _counts[last])
+            last--;
+        return (first, last);
     }
 
     private int Bin(double level) => (int)Math.Clamp(Math.Floor((level - _origin) / _width), -1, Bins);

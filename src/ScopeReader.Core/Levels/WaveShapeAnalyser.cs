@@ -1,3 +1,6 @@
+using ScopeReader.Edges;
+using ScopeReader.Frequency;
+
 namespace ScopeReader.Levels;
 
 /// <summary>Takes a first look at a waveform.</summary>
@@ -9,6 +12,7 @@ public static class WaveShapeAnalyser
     // and more; a wave that ramps a quarter of the time 0.8 and 0.08; strong ringing leaves the levels but not for the middle.
     private const double MostlyNear = 0.55, LargelyNear = 0.35, SeldomBetween = 0.08;
     private const double LeastSeparation = 5, FewestOnState = 3;
+    private const double FewCodes = 4.5, LeastOfNoise = 0.2, SteadySpread = 0.1, SpikeShare = 0.0005, SpikedRange = 0.8;
 
     /// <summary>Classifies a waveform and finds its rough levels.</summary>
     /// <param name="samples">Shape [n], any unit, n of 1 or more.</param>
@@ -22,9 +26,18 @@ public static class WaveShapeAnalyser
 
         double step = QuantisationStep.Find(samples);
         var histogram = new LevelHistogram(samples, minimum, maximum, step);
-        int middle = histogram.Divide();
-        double low = histogram.Shorth(0, middle), high = histogram.Shorth(middle + 1, histogram.Bins - 1);
-        double scatter = 1.4826 * Math.Min(histogram.MedianDistance(0, middle, low), histogram.MedianDistance(middle + 1, histogram.Bins - 1, high));
+        WaveShape whole = Classify(samples, histogram, minimum, maximum, step, 0, histogram.Bins - 1);
+        // A few spikes can take one side of the wave for themselves.
+        (int first, int last) = histogram.Within(SpikeShare);
+        return whole.Kind == WaveKind.Other && last - first < SpikedRange * histogram.Bins && last > first
+            && Classify(samples, histogram, minimum, maximum, step, first, last) is { Kind: not WaveKind.Other } without ? without : whole;
+    }
+
+    private static WaveShape Classify(ReadOnlySpan<double> samples, LevelHistogram histogram, double minimum, double maximum, double step, int first, int last)
+    {
+        int middle = histogram.Divide(first, last);
+        double low = histogram.Shorth(first, middle), high = histogram.Shorth(middle + 1, last);
+        double scatter = 1.4826 * Math.Min(histogram.MedianDistance(first, middle, low), histogram.MedianDistance(middle + 1, last, high));
         double noise = Math.Min(scatter, FromDifferences(samples));
         if (!(high > low))
             return new WaveShape(WaveKind.Other, minimum, maximum, step, minimum, maximum, noise);
@@ -37,11 +50,25 @@ public static class WaveShapeAnalyser
         double onStates = (onLow + onHigh) / samples.Length, between = (double)histogram.Between(low + swing / 3, high - swing / 3) / samples.Length;
         bool twoStates = swing > LeastSeparation * scatter && Math.Min(onLow, onHigh) >= FewestOnState
             && (onStates >= MostlyNear || (onStates >= LargelyNear && between <= SeldomBetween));
+        if (twoStates && swing < FewCodes * step && TogglesLikeNoise(samples, low, high, noise, onHigh / (onLow + onHigh)))
+            return new WaveShape(WaveKind.Other, minimum, maximum, step, minimum, maximum, noise);
         if (twoStates && StateLevelAnalyser.AreApart(samples, low, high, noise))
             return new WaveShape(WaveKind.TwoState, minimum, maximum, step, low, high, noise);
         return SineCheck.FitLine(samples) is { } fast
             ? new WaveShape(WaveKind.Sinusoidal, minimum, maximum, step, fast.Offset - fast.Amplitude, fast.Offset + fast.Amplitude, fast.Noise)
             : new WaveShape(WaveKind.Other, minimum, maximum, step, minimum, maximum, noise);
+    }
+
+    // Noise about a level between two codes looks like two states. It toggles 2p(1 - p) times a sample, p the share of the upper code,
+    // and so less where it is slow; a logic signal toggles seldom, or in step with a period.
+    private static bool TogglesLikeNoise(ReadOnlySpan<double> samples, double low, double high, double noise, double share)
+    {
+        samples = Scattered.Stretch(samples, low, high, noise);
+        IReadOnlyList<Transition> transitions = Transitions.Find(samples, low, high, noise);
+        if (transitions.Count < LeastOfNoise * 2 * share * (1 - share) * samples.Length)
+            return false;
+        double[] rising = [.. transitions.Where(t => t.IsRising).Select(t => t.Instant)], falling = [.. transitions.Where(t => !t.IsRising).Select(t => t.Instant)];
+        return EdgeRegression.Fit(rising, falling, samplePhase: false) is not { } fit || fit.Spread > SteadySpread * fit.Period;
     }
 
     // Second differences pass over slopes; their median over the few that are edges. White noise gives them √6 sigma.

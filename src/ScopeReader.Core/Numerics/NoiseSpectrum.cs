@@ -10,6 +10,10 @@ public sealed class NoiseSpectrum
 {
     private const int LongestTransform = 1 << 20, MainLobe = 3, FewestBins = 12;
 
+    // The largest of 2^19 exponential powers exceeds 30 times their median in one record of a thousand.
+    private const int MostLines = 20, LowestLine = 3, HighestMultiple = 2000;
+    private const double StandsOut = 40;
+
     private readonly double[] _power;
     private readonly int _length, _modelled;
     private readonly double _fundamental, _variance;
@@ -49,6 +53,64 @@ public sealed class NoiseSpectrum
         double median = count % 2 == 1 ? bins[count / 2] : (bins[count / 2 - 1] + bins[count / 2]) / 2;
         // A median of n exponential powers scatters by 1/(√n ln 2), and Hann makes neighbours alike: 1.5 bins count as one.
         return (median / Math.Log(2), 2 * Math.Log(2) * Math.Log(2) * count / 1.5);
+    }
+
+    /// <summary>The strongest line that stands out of its surroundings and is no multiple of the fundamental.</summary>
+    /// <param name="beyond">Highest amplitude that a harmonic beyond the modelled ones may have, peak; it falls with its order.</param>
+    /// <returns>Cycles per sample and peak amplitude; an amplitude of 0 where no line stands out.</returns>
+    public (double Frequency, double Amplitude) StrongestLine(double beyond)
+    {
+        var tried = new HashSet<int>();
+        for (int tries = 0; tries < MostLines; tries++)
+        {
+            int peak = -1;
+            for (int k = LowestLine; k < _power.Length - LowestLine; k++)
+                if ((peak < 0 || _power[k] > _power[peak]) && !tried.Contains(k) && !IsModelled(k))
+                    peak = k;
+            if (peak < 0 || !(_power[peak] > StandsOut * Math.Max(MedianAround(peak), double.Epsilon)))
+                return (0, 0);
+            double power = 0, moment = 0;
+            for (int k = peak - 2; k <= peak + 2; k++)
+                (power, moment) = (power + _power[k], moment + k * _power[k]);
+            double place = moment / power, amplitude = AmplitudeAt(place / _length);
+            if (!IsMultiple(place, Math.Max(_modelled, _modelled * beyond / amplitude)))
+                return (place / _length, amplitude);
+            for (int k = peak - MainLobe; k <= peak + MainLobe; k++)
+                tried.Add(k);
+        }
+        return (0, 0);
+    }
+
+    /// <summary>Peak amplitude of a line near a frequency, noise included; 0 beyond the spectrum's ends.</summary>
+    public double AmplitudeAt(double frequency)
+    {
+        int centre = (int)Math.Round(frequency * _length);
+        if (centre < LowestLine || centre > _power.Length - LowestLine)
+            return 0;
+        double power = 0;
+        for (int k = centre - 2; k <= centre + 2; k++)
+            power += _power[k];
+        // A Hann line holds 1.5 times its largest possible bin, wherever it lies between two.
+        return Math.Sqrt(6 * power / (1.5 * _length));
+    }
+
+    // Whether a multiple of the fundamental, of an order up to the one given, is folded to that bin.
+    private bool IsMultiple(double bin, double highest)
+    {
+        for (int k = 1; k <= Math.Min(highest, HighestMultiple); k++)
+        {
+            double folded = k * _fundamental;
+            if (Math.Abs(Math.Abs(folded - Math.Round(folded)) * _length - bin) <= MainLobe)
+                return true;
+        }
+        return false;
+    }
+
+    private double MedianAround(int bin)
+    {
+        double[] around = _power[Math.Max(1, bin - 64)..Math.Min(_power.Length - 1, bin + 65)];
+        Array.Sort(around);
+        return around[around.Length / 2];
     }
 
     private bool IsModelled(int bin)
