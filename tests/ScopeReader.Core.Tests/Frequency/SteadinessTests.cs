@@ -1,4 +1,3 @@
-using ScopeReader.Frequency;
 using ScopeReader.Readings;
 using ScopeReader.Signals;
 using static ScopeReader.Tests.Waves;

@@ -1,5 +1,4 @@
 using ScopeReader.Readings;
-using ScopeReader.Signals;
 using static ScopeReader.Tests.Waves;
 
 namespace ScopeReader.Tests.Levels;
