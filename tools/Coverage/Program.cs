@@ -5,7 +5,7 @@ using ScopeReader.Coverage;
 int runs = 200;
 ulong first = 1;
 bool truth = false;
-string? save = null;
+string? save = null, table = null;
 var names = new List<string>();
 for (int i = 0; i < args.Length; i++)
 {
@@ -20,6 +20,10 @@ for (int i = 0; i < args.Length; i++)
             save = value;
             i++;
             break;
+        case "--table" when NamedTables.All.Any(t => t.Name == value):
+            table = value;
+            i++;
+            break;
         case "--truth":
             truth = true;
             break;
@@ -28,9 +32,15 @@ for (int i = 0; i < args.Length; i++)
             i++;
             break;
         default:
-            Console.Error.WriteLine($"expected --runs N, --seed N (the first seed), --scenario NAME[,NAME], --truth or --save FILE.csv, found \"{args[i]}\"");
+            Console.Error.WriteLine($"expected --runs N, --seed N (the first seed), --scenario NAME[,NAME], --table NAME, --truth or --save FILE.csv, found \"{args[i]}\"");
+            Console.Error.WriteLine($"tables: {string.Join(", ", NamedTables.All.Select(t => $"{t.Name} ({t.Meaning})"))}");
             return 64;
     }
+}
+if (table is not null)
+{
+    NamedTables.All.First(t => t.Name == table).Write(runs, first, Console.Out);
+    return 0;
 }
 if (names.Find(n => Scenarios.All.All(s => s.Name != n)) is { } unknown)
 {

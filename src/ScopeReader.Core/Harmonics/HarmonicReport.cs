@@ -3,41 +3,28 @@ using static ScopeReader.Harmonics.HarmonicAnalyser;
 
 namespace ScopeReader.Harmonics;
 
-/// <summary>Writes the harmonics of one waveform down.</summary>
-internal sealed class HarmonicReport
+/// <summary>Writes the fundamental, each harmonic and the worst of them down.</summary>
+internal sealed class HarmonicReport(HarmonicLines lines)
 {
-    private readonly WaveformJob _job;
-    private readonly HarmonicLevels _levels;
-    private readonly HarmonicLevel[] _harmonics;
-    private readonly int _wanted, _seen, _cycles;
-    private readonly RollOff _rollOff;
+    private const double OneSided95 = 1.645;
 
-    public HarmonicReport(WaveformJob job, HarmonicLevels levels, int wanted, int seen, int cycles)
-    {
-        (_job, _levels, _wanted, _seen, _cycles) = (job, levels, wanted, seen, cycles);
-        _harmonics = [.. Enumerable.Range(1, seen).Select(k => levels[k])];
-        _rollOff = new RollOff(job.Plan.Chain, job.Waveform.Axis.IsTimed ? levels.Frequency / job.Waveform.Interval : null);
-    }
+    private readonly WaveformJob _job = lines.Job;
+    private readonly HarmonicCounts _counts = lines.Counts;
+    private readonly ExpectedPulse? _pulse = ExpectedPulse.Of(lines.Job);
 
-    private HarmonicLevel Fundamental => _harmonics[0];
-
-    // Of nine harmonics of noise alone one passes its own threshold in nine records of a hundred: what is said of all of them asks for more.
-    private bool AnyStandsOut => _harmonics.Skip(1).Any(h => h.Fitted > h.ThresholdAmong(_seen - 1));
-
-    public void Write()
+    public IReadOnlyList<Reading> Write()
     {
         WriteFundamental();
         var written = new List<Reading>();
-        for (int k = 2; k <= _wanted; k++)
-            if (k > _seen)
+        for (int k = 2; k <= _counts.Wanted; k++)
+            if (k > _counts.Seen)
                 _job.Sheet.Refuse("above-nyquist", AboveNyquist(k), Quantities.Harmonic(k));
-            else if (Harmonic(_harmonics[k - 1], Quantities.Harmonic(k)) is { } reading)
+            else if (Harmonic(lines.Harmonics[k - 1], Quantities.Harmonic(k)) is { } reading)
                 written.Add(reading);
         foreach (Reading reading in written)
             _job.Sheet.Add(reading);
         WriteWorst(written);
-        WriteDistortion();
-        new HarmonicFindings(_job, _rollOff, written).Write();
+        return written;
     }
 
     private void WriteFundamental()
@@ -48,8 +35,8 @@ internal sealed class HarmonicReport
             _job.Sheet.Refuse("not-volts", $"the channel has {unit}, and this level is one of a voltage", Quantities.FundamentalLevel, Quantities.FundamentalPower);
             return;
         }
-        double volts = Fundamental.Amplitude / Math.Sqrt(2);
-        Budget budget = _job.Chain.ForAbsoluteDecibels([.. Fundamental.Terms(), .. _rollOff.Terms(1), Frequency(1)]);
+        double volts = lines.Fundamental.Amplitude / Math.Sqrt(2);
+        Budget budget = _job.Chain.ForAbsoluteDecibels([.. lines.Fundamental.Terms(), .. lines.RollOff.Terms(1), lines.FrequencyTerm(1)]);
         Add(Quantities.FundamentalLevel, Decibels.OfAmplitudes(volts), budget);
         if (_job.Plan.Chain.Impedance is { } ohms)
             Add(Quantities.FundamentalPower, Decibels.DbmOfVolts(volts, ohms), budget);
@@ -59,97 +46,63 @@ internal sealed class HarmonicReport
 
     private Reading? Harmonic(HarmonicLevel line, Quantity quantity)
     {
-        if (!line.IsResolved)
-        {
-            Hide(line, quantity);
-            return null;
-        }
-        Budget budget = _job.Chain.ForRelativeDecibels([.. line.Terms(), .. Fundamental.Terms(" of fundamental"), .. _rollOff.Terms(line.Order), Frequency(line.Order)]);
-        return new Reading(quantity, Decibels.OfAmplitudes(line.Amplitude / Fundamental.Amplitude), "dBc", budget, Method) { Count = _cycles };
-    }
-
-    private void Hide(HarmonicLevel line, Quantity quantity)
-    {
-        double bound = Decibels.OfAmplitudes(line.Threshold / Fundamental.Amplitude);
+        if (line.IsResolved)
+            return new Reading(quantity, lines.Dbc(line.Amplitude), "dBc", _job.Chain.ForRelativeDecibels(lines.Terms(line)), Method)
+            {
+                Count = _counts.Cycles,
+                Expected = _pulse?.LevelDbc(line.Order),
+            };
+        double bound = lines.Dbc(line.AtMost);
         string code = line.IsHiddenBySteps ? "quantisation" : "below-noise", reason = line.IsHiddenBySteps
-            ? Text($"< {bound:F1} dBc: not resolved from the converter's steps, for no noise spreads them; use more of the range, or more bits")
+            ? Text($"< {bound:F1} dBc: not resolved: quantisation: no noise spreads the converter's steps, which may make as much; use more of the range, more bits, or add noise")
+            : line.Shows
+            ? Text($"< {bound:F1} dBc: a line shows, too near the noise for a number; capture longer")
             : Text($"< {bound:F1} dBc: noise alone shows as much in one record of a hundred; capture longer");
         // The bound holds at the source only where the chain's flatness is known.
         if (_job.Plan.Chain.FlatnessDb is { } flatness)
             _job.Sheet.RefuseBelow(code, reason, bound + flatness, quantity);
         else
             _job.Sheet.Refuse(code, reason, quantity);
+        return null;
     }
 
-    private string AboveNyquist(int order) => _job.Waveform.Axis.IsTimed
-        ? Text($"harmonic {order} lies above half of the sample rate; sample at {Engineering.Format(2.2 * order * _levels.Frequency / _job.Waveform.Interval, "Sa/s", 2)} or more")
-        : Text($"harmonic {order} lies above half of the sample rate; take {2.2 * order:F0} samples or more a period");
+    private string AboveNyquist(int order)
+    {
+        string how = _job.Waveform.Axis.IsTimed
+            ? Text($"sample at {Engineering.Format(2.2 * order * lines.Levels.Frequency / _job.Waveform.Interval, "Sa/s", 2)} or more")
+            : Text($"take {2.2 * order:F0} samples or more a period");
+        if (order <= _counts.Fitted && lines.Harmonics[order - 1] is { IsResolved: true } folded)
+            return Text($"harmonic {order} lies above half of the sample rate; where sampling folds it to, {lines.Place(Folding.Apparent(order * lines.Levels.Frequency, 1))}, stands a line of {lines.Dbc(folded.Amplitude):F1} dBc; {how}");
+        if (Folding.Collision(lines.Levels.Frequency, lines.Levels.Count, order, _counts.Wanted) is { } other)
+            return Text($"harmonic {order} lies above half of the sample rate, and sampling folds it onto {(other == 0 ? "the mean" : other == 1 ? "the fundamental" : Text($"harmonic {other}"))}; {how}");
+        return Text($"harmonic {order} lies above half of the sample rate; {how}");
+    }
 
     private void WriteWorst(List<Reading> written)
     {
-        if (AnyStandsOut && written.MaxBy(r => r.Value) is { } worst)
-            _job.Sheet.Add(new Reading(Quantities.WorstHarmonic, worst.Value, "dBc", worst.Budget, Method) { Count = _cycles, Note = $"{worst.Quantity.Id}, of harmonics 2 to {_seen}" });
-        else if (_seen < 2)
+        if (_counts.Seen < 2)
+        {
             _job.Sheet.Refuse("above-nyquist", AboveNyquist(2), Quantities.WorstHarmonic);
-        else
-        {
-            double bound = Decibels.OfAmplitudes(_harmonics.Skip(1).Max(h => h.ThresholdAmong(_seen - 1)) / Fundamental.Amplitude);
-            _job.Sheet.Refuse("below-noise", Text($"< {bound:F1} dBc: noise alone shows as much in the strongest of harmonics 2 to {_seen}, in one record of a hundred; capture longer"), Quantities.WorstHarmonic);
-        }
-    }
-
-    private void WriteDistortion()
-    {
-        if (_seen < _wanted)
-        {
-            _job.Sheet.Refuse("above-nyquist", Beyond(), Quantities.Thd, Quantities.ThdR);
             return;
         }
-        ReadOnlySpan<HarmonicLevel> harmonics = _harmonics.AsSpan(1);
-        double power = 0, noise = 0, steps = 0, most = 0, degreesOfFreedom = double.PositiveInfinity;
-        foreach (HarmonicLevel h in harmonics)
+        string among = _counts.Seen > 2 ? Text($"of harmonics 2 to {_counts.Seen}") : "the only one in band";
+        double hidden = lines.InBand.Where(h => !h.IsResolved).Select(h => lines.Dbc(h.AtMost)).DefaultIfEmpty(double.NegativeInfinity).Max();
+        if (written.MaxBy(r => r.Value) is not { } worst)
         {
-            double variance = h.Noise * h.Noise;
-            // Each fitted square holds 2u² of noise on average, which is taken off; what is left scatters by 2Au and 2u².
-            power += h.Fitted * h.Fitted - 2 * variance;
-            noise += 4 * h.Fitted * h.Fitted * variance;
-            steps += Math.Pow(2 * h.Fitted * h.Steps, 2) + Math.Pow(2 * h.Fitted * h.Folded, 2);
-            most += h.Threshold * h.Threshold;
-            degreesOfFreedom = Math.Min(degreesOfFreedom, h.DegreesOfFreedom);
-        }
-        if (!AnyStandsOut || power <= 0)
-        {
-            double bound = 100 * Math.Sqrt(most) / Fundamental.Amplitude;
-            _job.Sheet.Refuse("below-noise", $"< {Engineering.Format(bound, "%", 2)}: none of harmonics 2 to {_wanted} stands out of the noise; capture longer", Quantities.Thd, Quantities.ThdR);
+            double bound = lines.Dbc(lines.InBand.Max(h => Math.Max(h.AtMost, h.ThresholdAmong(_counts.Seen - 1))));
+            string reason = lines.InBand.Any(h => h.IsHiddenBySteps)
+                ? Text($"< {bound:F1} dBc: not resolved: quantisation, {among}")
+                : Text($"< {bound:F1} dBc: noise alone shows as much in the strongest {among}, in one record of a hundred; capture longer");
+            _job.Sheet.Refuse(lines.InBand.Any(h => h.IsHiddenBySteps) ? "quantisation" : "below-noise", reason, Quantities.WorstHarmonic);
             return;
         }
-        double decibels = Decibels.PerRelativeAmplitude / (2 * power), thd = Math.Sqrt(power) / Fundamental.Amplitude;
-        Budget budget = _job.Chain.ForRelativeDecibels(
-            [
-                BudgetTerm.Normal("noise", Math.Sqrt(noise), decibels, degreesOfFreedom),
-                BudgetTerm.Normal("quantisation", Math.Sqrt(steps), decibels),
-                .. Fundamental.Terms(" of fundamental"),
-                .. _rollOff.Terms(Strongest()),
-                Frequency(Strongest()),
-            ]);
-        // From dB to parts: d(thd) = thd · ln 10/20 · dB; THD_R changes with THD_F by (1 + THD_F²)^(-3/2).
-        Budget parts = budget.Times(100 * thd / Decibels.PerRelativeAmplitude);
-        Add(Quantities.Thd, 100 * thd, parts, Text($"harmonics 2 to {_wanted}"));
-        Add(Quantities.ThdR, 100 * Distortion.ToWhole(thd), parts.Times(Math.Pow(1 + thd * thd, -1.5)), Text($"harmonics 2 to {_wanted}"));
+        // Where others are as strong within their uncertainty, the largest of them reads high, or one that is hidden is larger.
+        double next = written.Where(r => r != worst).Select(r => r.Value + OneSided95 * r.Budget.Repeatability).DefaultIfEmpty(double.NegativeInfinity).Max();
+        double excess = Math.Max(0, Math.Max(next, hidden) - worst.Value);
+        Budget budget = excess > 0 ? worst.Budget.With(BudgetTerm.Rectangular("choice of the worst", excess)) : worst.Budget;
+        _job.Sheet.Add(new Reading(Quantities.WorstHarmonic, worst.Value, "dBc", budget, Method) { Count = _counts.Cycles, Note = $"{worst.Quantity.Id}, {among}" });
     }
 
-    private int Strongest() => _harmonics.Skip(1).MaxBy(h => h.Fitted)!.Order;
-
-    private string Beyond() =>
-        Text($"thd counts harmonics 2 to {_wanted}, and {_seen + 1} and above lie beyond half of the sample rate; sample faster, or set harmonics = {Math.Max(2, _seen)} in [levels]");
-
-    // Over the record the wave is off the fitted one by up to x cycles at a harmonic: its level reads low by π²x²/6.
-    private BudgetTerm Frequency(int order)
-    {
-        double x = 2 * order * _levels.FrequencyUncertainty * _job.Waveform.Count;
-        return BudgetTerm.Rectangular("frequency", Math.PI * Math.PI * x * x / 6, Decibels.PerRelativeAmplitude);
-    }
-
-    private void Add(Quantity quantity, double value, Budget budget, string? note = null) =>
-        _job.Sheet.Add(new Reading(quantity, value, quantity.Unit, budget, Method) { Count = _cycles, Note = note });
+    private void Add(Quantity quantity, double value, Budget budget) =>
+        _job.Sheet.Add(new Reading(quantity, value, quantity.Unit, budget, Method) { Count = _counts.Cycles });
 }

@@ -27,10 +27,27 @@ public static class IdealPulse
     public static double GaussianEdgeDb(double edgeSigma, int harmonic) =>
         -Decibels.PerRelativeAmplitude * 2 * Math.PI * Math.PI * ((double)harmonic * harmonic - 1) * edgeSigma * edgeSigma;
 
+    /// <summary>The same with Gaussian edges of their own durations, the width taken at half height.</summary>
+    /// <param name="dutyFactor">d, above 0 and below 1.</param>
+    /// <param name="riseSigma">Standard deviation of the rising edge over the period.</param>
+    /// <param name="fallSigma">Standard deviation of the falling edge over the period.</param>
+    /// <param name="harmonic">k, 1 or more.</param>
+    /// <returns>dBc: of c_k ∝ (g_r - g_f e^(-2πikd))/k with g = exp(-2π²k²s²).</returns>
+    public static double EdgedLevelDbc(double dutyFactor, double riseSigma, double fallSigma, int harmonic) =>
+        Decibels.OfAmplitudes(Edged(dutyFactor, riseSigma, fallSigma, harmonic) / Edged(dutyFactor, riseSigma, fallSigma, 1));
+
     /// <summary>How far from one half a duty factor is that gives a second harmonic of a level: 20 log|cos πd|, solved.</summary>
     /// <param name="secondDbc">Level of the second harmonic, 0 dBc or less.</param>
     /// <returns>|d - 1/2|; the level does not say on which side.</returns>
     public static double DutyDeviation(double secondDbc) => Math.Asin(Decibels.AmplitudeRatio(secondDbc)) / Math.PI;
+
+    private static double Edged(double duty, double riseSigma, double fallSigma, int k)
+    {
+        double rise = Math.Exp(-2 * Math.PI * Math.PI * k * k * riseSigma * riseSigma), fall = Math.Exp(-2 * Math.PI * Math.PI * k * k * fallSigma * fallSigma);
+        // |g_r - g_f e^(-2ix)|² with x = πkd, written so that nothing cancels where the edges are alike.
+        double s = Math.Sin(Math.PI * k * duty);
+        return Math.Sqrt((rise - fall) * (rise - fall) + 4 * rise * fall * s * s) / k;
+    }
 
     private static double Sinc(double x) => x == 0 ? 1 : Math.Sin(Math.PI * x) / (Math.PI * x);
 }

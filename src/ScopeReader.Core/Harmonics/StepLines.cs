@@ -5,29 +5,31 @@ namespace ScopeReader.Harmonics;
 /// <summary>Lines that a converter's steps add to a periodic wave: rounding is the same in every period unless noise spreads it.</summary>
 /// <remarks>
 /// The fitted wave is rounded again over one period, shifted and stretched by parts of a step, for where the true wave's top and
-/// bottom lie between the codes is not known; the rms over those places is the standard uncertainty. Noise of σ turns the rounding error of step q
-/// into its mean, Σ (-1)^m q/(πm) sin(2πm x/q) exp(-2π²m²σ²/q²): half a step of noise leaves a hundredth of it.
+/// bottom lie between the codes is not known; the largest line over those places bounds the error. Noise of σ turns the rounding
+/// error of step q into its mean, Σ (-1)^m q/(πm) sin(2πm x/q) exp(-2π²m²σ²/q²): half a step of noise leaves a hundredth of it.
+/// An error that stays within ±e makes a line of at most 4e/π, that of a square wave in step with it: 2q/π without any noise.
 /// </remarks>
 internal static class StepLines
 {
-    private const int Points = 4096, Places = 16;
+    private const int Points = 4096, Places = 64, MostTerms = 10;
+    private const double SpreadByNoise = 0.6;
 
-    /// <summary>Rms of the cosine or sine part that the steps add to each harmonic.</summary>
+    /// <summary>What the steps add to each harmonic.</summary>
     /// <param name="model">The fitted wave.</param>
     /// <param name="harmonics">How many are asked for.</param>
     /// <param name="step">q, in the samples' unit; 0 for none.</param>
     /// <param name="noise">σ of one sample before the converter.</param>
     /// <returns>Shape [harmonics].</returns>
-    public static double[] Rms(HarmonicModel model, int harmonics, double step, double noise)
+    public static StepError[] Of(HarmonicModel model, int harmonics, double step, double noise)
     {
-        var rms = new double[harmonics];
-        if (step == 0 || noise > 0.6 * step)
-            return rms;
+        var errors = new StepError[harmonics];
+        if (step == 0 || noise > SpreadByNoise * step)
+            return errors;
         double[] wave = OnePeriod(model);
         double bottom = wave.Min(), swing = wave.Max() - bottom;
         if (swing == 0)
-            return rms;
-        var error = new double[Points];
+            return errors;
+        double[] error = new double[Points], likely = new double[harmonics];
         for (int place = 0; place < Places; place++)
         {
             // Evenly spread pairs of places, by the golden section.
@@ -37,12 +39,22 @@ internal static class StepLines
             for (int k = 1; k <= harmonics; k++)
             {
                 var sums = ToneSums.Of(error, (double)k / Points, timed: false);
-                rms[k - 1] += (sums.Cosine * sums.Cosine + sums.Sine * sums.Sine) * 4 / ((double)Points * Points) / 2 / Places;
+                likely[k - 1] = Math.Max(likely[k - 1], 2.0 / Points * double.Hypot(sums.Cosine, sums.Sine));
             }
         }
+        double most = 4 / Math.PI * step * Largest(noise / step);
         for (int k = 0; k < harmonics; k++)
-            rms[k] = Math.Sqrt(rms[k]);
-        return rms;
+            errors[k] = new StepError(likely[k], most);
+        return errors;
+    }
+
+    // The largest mean rounding error, steps.
+    private static double Largest(double sigma)
+    {
+        double largest = 0;
+        for (int i = 0; i <= 64; i++)
+            largest = Math.Max(largest, Math.Abs(Rounding(i / 128.0, sigma)));
+        return largest;
     }
 
     private static double[] OnePeriod(HarmonicModel model)
@@ -66,8 +78,10 @@ internal static class StepLines
     {
         if (sigma < 0.05)
             return Math.Round(x) - x;
+        // Terms beyond 0.7 steps of noise have under 1e-4 left.
+        int terms = Math.Min(MostTerms, (int)(0.7 / sigma) + 1);
         double sum = 0;
-        for (int m = 1; m <= 10; m++)
+        for (int m = 1; m <= terms; m++)
             sum += (m % 2 == 0 ? 1 : -1) / (Math.PI * m) * Math.Sin(2 * Math.PI * m * x) * Math.Exp(-2 * Math.PI * Math.PI * m * m * sigma * sigma);
         return sum;
     }

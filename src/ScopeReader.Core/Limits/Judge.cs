@@ -37,6 +37,8 @@ public static class Judge
         // Too small to resolve is small enough for an upper limit that lies higher than what could have been resolved.
         if (why is { AtMost: { } bound } && limit.Low is null && bound <= limit.High)
             return new Verdict(limit, VerdictOutcome.Pass, null, null, $"too small to resolve, and so inside: {why.Reason}");
+        if (why is { AtLeast: { } least } && limit.High is null && least >= limit.Low)
+            return new Verdict(limit, VerdictOutcome.Pass, null, null, $"too large to resolve, and so inside: {why.Reason}");
         return new Verdict(limit, VerdictOutcome.NotMeasured, null, null, why?.Reason ?? "this capture does not show it");
     }
 

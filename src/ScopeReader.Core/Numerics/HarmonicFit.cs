@@ -10,14 +10,18 @@ public sealed class HarmonicFit
 {
     private readonly Cholesky _normal;
 
-    private HarmonicFit(HarmonicModel model, Cholesky normal, bool frequencyKnown) =>
-        (Model, _normal, FrequencyKnown) = (model, normal, frequencyKnown);
+    private HarmonicFit(HarmonicModel model, Cholesky normal, bool frequencyKnown, double restSquares) =>
+        (Model, _normal, FrequencyKnown, RestSquares) = (model, normal, frequencyKnown, restSquares);
 
     /// <summary>The fitted model.</summary>
     public HarmonicModel Model { get; }
 
     /// <summary>True where the frequency was given.</summary>
     public bool FrequencyKnown { get; }
+
+    /// <summary>Sum of the squares of the samples less the model.</summary>
+    /// <remarks>From the sums of the fit: right to 1e-13 of the samples' own sum of squares or so.</remarks>
+    public double RestSquares { get; }
 
     /// <summary>Number of unknowns.</summary>
     public int Unknowns => 2 * Model.Harmonics + (FrequencyKnown ? 1 : 2);
@@ -33,7 +37,7 @@ public sealed class HarmonicFit
     /// <summary>Fits offset and harmonics at a known frequency.</summary>
     /// <param name="samples">Shape [n].</param>
     /// <param name="frequency">Cycles per sample, above 0.</param>
-    /// <param name="harmonics">K, 1 or more; K · frequency stays below 0.5.</param>
+    /// <param name="harmonics">K, 1 or more; those above 0.5 are fitted where sampling folds them to.</param>
     /// <returns>The fit, or null where harmonics cannot be told apart in this record.</returns>
     public static HarmonicFit? At(ReadOnlySpan<double> samples, double frequency, int harmonics) =>
         Solve(samples, Flat(frequency, harmonics), frequencyKnown: true);
@@ -81,6 +85,9 @@ public sealed class HarmonicFit
         foreach (double v in samples)
             mean += v;
         mean /= samples.Length;
+        double rest = 0;
+        foreach (double v in samples)
+            rest += (v - mean) * (v - mean);
         var sums = new Dirichlet[2 * k + 1];
         for (int i = 0; i <= 2 * k; i++)
             sums[i] = Dirichlet.Of(i * at.Frequency, samples.Length);
@@ -97,7 +104,9 @@ public sealed class HarmonicFit
             return null;
         double[] x = normal.Solve(right);
         double frequency = at.Frequency + (frequencyKnown ? 0 : x[size - 1]);
-        return new HarmonicFit(new HarmonicModel(frequency, mean + x[0], x[1..(k + 1)], x[(k + 1)..(2 * k + 1)]), normal, frequencyKnown);
+        for (int i = 0; i < size; i++)
+            rest -= x[i] * right[i];
+        return new HarmonicFit(new HarmonicModel(frequency, mean + x[0], x[1..(k + 1)], x[(k + 1)..(2 * k + 1)]), normal, frequencyKnown, Math.Max(0, rest));
     }
 
     private static double[,] Normal(HarmonicModel at, Dirichlet[] sums, int size)

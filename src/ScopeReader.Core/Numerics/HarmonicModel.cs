@@ -22,12 +22,18 @@ public sealed record HarmonicModel(double Frequency, double Offset, double[] Cos
 
     /// <summary>The samples less the model.</summary>
     /// <param name="samples">Shape [n].</param>
-    public double[] Residual(ReadOnlySpan<double> samples)
+    public double[] Residual(ReadOnlySpan<double> samples) => Residual(samples, samples.Length);
+
+    /// <summary>The samples in the middle of the record less the model.</summary>
+    /// <param name="samples">Shape [n].</param>
+    /// <param name="count">How many, at most n.</param>
+    public double[] Residual(ReadOnlySpan<double> samples, int count)
     {
-        double[] rest = samples.ToArray();
+        int first = (samples.Length - count) / 2;
+        double[] rest = samples.Slice(first, count).ToArray();
         var cosine = new double[Block];
         var sine = new double[Block];
-        double middle = (samples.Length - 1) / 2.0;
+        double middle = (samples.Length - 1) / 2.0 - first;
         for (int i = 0; i < rest.Length; i++)
             rest[i] -= Offset;
         for (int k = 1; k <= Harmonics; k++)

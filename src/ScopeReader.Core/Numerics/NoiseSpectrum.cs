@@ -33,6 +33,12 @@ public sealed class NoiseSpectrum
         _power = Periodogram(residual.Slice((residual.Length - _length) / 2, _length));
     }
 
+    /// <summary>The periodogram, bins 0 to half of its length: white noise has its variance in each.</summary>
+    public ReadOnlySpan<double> Power => _power;
+
+    /// <summary>Number of samples that it was made of.</summary>
+    public int Length => _length;
+
     /// <summary>Variance of one sample, were the noise all over the band as it is near a frequency, and its degrees of freedom.</summary>
     /// <param name="frequency">Cycles per sample, 0 to 0.5.</param>
     /// <remarks>Where a short record leaves too few bins, the variance of the whole residual.</remarks>
@@ -113,7 +119,8 @@ public sealed class NoiseSpectrum
         return around[around.Length / 2];
     }
 
-    private bool IsModelled(int bin)
+    /// <summary>True where the model has taken the noise of a bin too.</summary>
+    internal bool IsModelled(int bin)
     {
         double order = Math.Round(bin / (_fundamental * _length));
         return order >= 1 && order <= _modelled && Math.Abs(bin - order * _fundamental * _length) <= MainLobe;

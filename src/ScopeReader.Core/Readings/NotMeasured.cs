@@ -5,4 +5,5 @@ namespace ScopeReader.Readings;
 /// <param name="Code">Which reason, kebab-case, for programs: <c>too-few-samples</c>.</param>
 /// <param name="Reason">The reason and what to do, for people.</param>
 /// <param name="AtMost">What the value lies below although it was not resolved, in the quantity's unit; null where nothing is known.</param>
-public sealed record NotMeasured(Quantity Quantity, string Code, string Reason, double? AtMost = null);
+/// <param name="AtLeast">What the value lies above although it was not resolved; null where nothing is known.</param>
+public sealed record NotMeasured(Quantity Quantity, string Code, string Reason, double? AtMost = null, double? AtLeast = null);

@@ -131,6 +131,18 @@ public static class Quantities
     /// <summary>Total harmonic distortion to the whole.</summary>
     public static Quantity ThdR { get; } = new("thd-r", "%", "root sum of squares of the harmonics over that of harmonics and fundamental", "THD_R", Waveform);
 
+    /// <summary>Signal to noise and distortion.</summary>
+    public static Quantity Sinad { get; } = new("sinad", "dB", "power of the fundamental over that of everything else but the mean", "IEEE Std 1057 and 1241 (from memory)", Waveform);
+
+    /// <summary>Effective number of bits.</summary>
+    public static Quantity Enob { get; } = new("enob", "bit", "bits of the ideal converter that would leave as much beside a full-scale sine", "(SINAD - 1.76 dB)/6.02 dB, IEEE Std 1057 and 1241 (from memory)", Waveform);
+
+    /// <summary>Spurious-free dynamic range.</summary>
+    public static Quantity Sfdr { get; } = new("sfdr", "dB", "level of the fundamental over the strongest other line, harmonic or not", "IEEE Std 1241 (from memory)", Waveform);
+
+    /// <summary>Noise density.</summary>
+    public static Quantity NoiseFloor { get; } = new("noise-floor", "dBc/Hz", "noise power in 1 Hz relative to the fundamental, mean over the band, lines left out", Common, Waveform);
+
     /// <summary>Frequency of the strongest line.</summary>
     public static Quantity PeakFrequency { get; } = new("peak-frequency", "Hz", "frequency of the strongest line of a spectrum trace", "parabola through three levels in dB", Spectrum);
 
@@ -148,7 +160,7 @@ public static class Quantities
         RiseTime, FallTime, RiseSlew, FallSlew, RiseOvershoot, FallOvershoot, RiseUndershoot, FallUndershoot,
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,
         RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude, RingingInductance, RingingCapacitance, DampingResistance,
-        FundamentalLevel, FundamentalPower, .. HarmonicTable, WorstHarmonic, Thd, ThdR,
+        FundamentalLevel, FundamentalPower, .. HarmonicTable, WorstHarmonic, Thd, ThdR, Sinad, Enob, Sfdr, NoiseFloor,
         PeakFrequency, PeakPower, PeakLevel,
     ];
 

@@ -39,6 +39,9 @@ public sealed record Reading
     /// <summary>How many edges, cycles or points the value rests on; null where that says nothing.</summary>
     public int? Count { get; init; }
 
+    /// <summary>What an ideal wave of the measured shape would have, in <see cref="Unit"/>; null where nothing is expected.</summary>
+    public double? Expected { get; init; }
+
     /// <summary>What the person should know beside the number: the settings behind it, or why it is the primary one.</summary>
     public string? Note { get; init; }
 }

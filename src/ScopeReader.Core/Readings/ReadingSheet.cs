@@ -33,6 +33,10 @@ public sealed class ReadingSheet
     public void RefuseBelow(string code, string reason, double atMost, Quantity quantity) =>
         _notMeasured.Add(new NotMeasured(quantity, code, reason, atMost));
 
+    /// <summary>Writes down that a quantity is too large to resolve, and what it lies above: a lower limit can be judged on that.</summary>
+    public void RefuseAbove(string code, string reason, double atLeast, Quantity quantity) =>
+        _notMeasured.Add(new NotMeasured(quantity, code, reason, AtLeast: atLeast));
+
     /// <summary>The primary reading of a quantity, or null.</summary>
     public Reading? Primary(Quantity quantity) => _readings.Find(r => r.IsPrimary && r.Quantity == quantity);
 }

@@ -16,6 +16,7 @@ internal sealed record ChannelObject(string Name, string Kind, string Unit, int 
 
 internal sealed record ReadingObject(string Quantity, double Value, string Unit, double? StandardUncertainty, double? ExpandedUncertainty, double Coverage,
     double? CoverageFactor, double? DegreesOfFreedom, double? Repeatability, IReadOnlyList<string> Missing, string Method, bool Primary, int? Count,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? Expected,
     [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] IReadOnlyList<BudgetObject>? Budget);
 
 internal sealed record BudgetObject(string Term, double Value, string Distribution, double Sensitivity, double Contribution, double? DegreesOfFreedom);

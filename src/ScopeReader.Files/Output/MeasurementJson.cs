@@ -82,7 +82,7 @@ public sealed class MeasurementJson(string program, bool explain)
         Budget budget = reading.Budget;
         return new ReadingObject(reading.Quantity.Id, reading.Value, reading.Unit, Finite(budget.StandardUncertainty), Finite(budget.ExpandedUncertainty),
             Budget.Coverage, Finite(budget.CoverageFactor), Finite(budget.DegreesOfFreedom), Finite(budget.Repeatability), budget.Missing,
-            reading.Method, reading.IsPrimary, reading.Count, explain ? [.. budget.Terms.Select(Term)] : null);
+            reading.Method, reading.IsPrimary, reading.Count, reading.Expected, explain ? [.. budget.Terms.Select(Term)] : null);
     }
 
     private static BudgetObject Term(BudgetTerm term) =>

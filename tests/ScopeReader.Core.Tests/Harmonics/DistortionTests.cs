@@ -28,5 +28,12 @@ public class DistortionTests
     public void Square_wave_to_its_ninth_harmonic_has_43_percent() => // E15: closed form
         Assert.Equal(42.879476837849, 100 * Distortion.ToFundamental([1, 0, 1 / 3.0, 0, 1 / 5.0, 0, 1 / 7.0, 0, 1 / 9.0]), 1e-9);
 
+    [Fact]
+    public void Effective_bits_are_those_of_the_ideal_converter()
+    {
+        Assert.Equal(6.88288343459612, Distortion.EffectiveBits(43.2), 1e-9); // E17, IEEE 1057/1241 (from memory)
+        Assert.Equal(8, Distortion.EffectiveBits(49.9257118967938), 1e-9); // E16, closed form
+    }
+
     private static double[] Series(Func<int, double> amplitude) => [.. Enumerable.Range(1, Terms).Select(amplitude)];
 }

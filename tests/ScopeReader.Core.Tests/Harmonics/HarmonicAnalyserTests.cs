@@ -123,6 +123,89 @@ public class HarmonicAnalyserTests
         Assert.Equal(-60, Value(sheet, "harmonic-4"), 1e-6);
     }
 
+    [Fact]
+    public void Clipped_wave_has_no_harmonics_of_its_own()
+    {
+        var sheet = new ReadingSheet();
+        sheet.Add(new Finding("clipping-suspected", "made", "top"));
+        Measure(new Recording { Interval = 1e-8, Count = 10_000 }.Take(Source(-40).Signal), 1.003e6 * 1e-8, Known, sheet);
+        Assert.Empty(sheet.Readings);
+        Assert.All(sheet.NotMeasured, n => Assert.Equal("clipped", n.Code));
+    }
+
+    [Fact]
+    public void Harmonics_from_above_half_of_the_sample_rate_are_called_by_their_order()
+    {
+        // 9.09 samples a cycle: harmonics 5 to 7 lie at 0.55, 0.66, 0.77 of the sample rate and show at 0.45, 0.34, 0.23.
+        double rate = 1.003e6 / 0.11;
+        Waveform taken = new Recording { Interval = 1 / rate, Count = 10_000, Noise = 1e-3 }.Take(Source(-40, -200, -200, -200, -200, -50).Signal);
+        ReadingSheet sheet = Measure(taken, 0.11);
+        // 0.23 of 9.118 MHz; the level is good to 8.7·1e-3·√2e-4/3e-3 = 0.04 dB.
+        Assert.StartsWith("folded by sampling from above half of the sample rate: harmonic 7 at 2.0972 MHz (-50.", sheet.Findings.Single(f => f.Code == "folded-harmonics").Text, StringComparison.Ordinal);
+        Assert.Contains("where sampling folds it to, 2.0972 MHz, stands a line of -50.", sheet.NotMeasured.Single(n => n.Quantity.Id == "harmonic-7").Reason, StringComparison.Ordinal);
+        Assert.Equal("above-nyquist", sheet.NotMeasured.Single(n => n.Quantity.Id == "harmonic-7").Code);
+        Assert.DoesNotContain(sheet.Findings, f => f.Code == "spurs");
+    }
+
+    [Fact]
+    public void Folded_harmonic_on_another_is_said_to_collide()
+    {
+        // Ten samples a cycle: harmonic 6 comes down on 4, 7 on 3, and so on.
+        ReadingSheet sheet = Measure(new Recording { Interval = 1e-7 / 1.003, Count = 10_000 }.Take(Source(-40, -55, -70).Signal), 0.1);
+        Assert.Contains("sampling folds it onto harmonic 3", sheet.NotMeasured.Single(n => n.Quantity.Id == "harmonic-7").Reason, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Square_wave_at_fifty_samples_a_cycle_names_what_falls_on_its_harmonics()
+    {
+        // Harmonics 49 and 51 come down on the fundamental, 47 on 3.
+        Waveform taken = new Recording { Interval = 1 / (50 * 1.003e6), Count = 10_000, Noise = 1e-4 }.Take(new SquareWave { Frequency = 1.003e6, RiseTime = 4e-9, FallTime = 4e-9 }.Signal);
+        ReadingSheet sheet = Measure(taken, 0.02);
+        Assert.Contains("49 on the fundamental", sheet.Findings.Single(f => f.Code == "colliding-harmonics").Text, StringComparison.Ordinal);
+        Assert.Contains(Terms(sheet, "harmonic-3"), t => t.Name == "other lines");
+    }
+
+    [Fact]
+    public void Line_that_is_no_harmonic_is_found_and_is_the_strongest_other_line()
+    {
+        double[] samples = new Recording { Interval = 1e-8, Count = 10_000, Noise = 1e-3 }.Samples(Source(-60).Signal);
+        for (int i = 0; i < samples.Length; i++)
+            samples[i] += 0.01 * Math.Cos(2 * Math.PI * 0.0777 * i);
+        ReadingSheet sheet = Measure(Waves.Of(samples), 1.003e6 * 1e-8);
+        // u = √(3σ²/N) = 1.7e-5 of 0.01: 0.015 dB, up to 1.18 times that; four of those.
+        Assert.Equal(40, Value(sheet, "sfdr"), 0.07);
+        Assert.StartsWith("a line that is no harmonic: 7.7700 MHz (-40.0 dBc): another source", sheet.Findings.Single(f => f.Code == "spurs").Text, StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public void Ideal_converter_leaves_what_its_bits_allow()
+    {
+        // E16: 49.926 dB for 8 bits. A sine of 127.4 steps stays clear of the topmost code's end; it is 0.04 dB under full scale, and its
+        // rounding has a mean square within 4 % of a twelfth (the Bessel sum of its steps), 0.17 dB.
+        var converter = new Converter(8, -128 / 127.4, 128 / 127.4);
+        Waveform taken = new Recording { Interval = 1e-8, Count = 50_000, Converter = converter }.Take(Source().Signal);
+        ReadingSheet sheet = Measure(taken, 1.003e6 * 1e-8);
+        Assert.Equal(49.9257118967938, Value(sheet, "sinad"), 0.22);
+        Assert.Equal(8, Value(sheet, "enob"), 0.22 / 6.02);
+        Assert.Equal("quantisation", sheet.NotMeasured.Single(n => n.Quantity == Quantities.NoiseFloor).Code);
+    }
+
+    [Fact]
+    public void Noise_floor_is_the_noise_in_a_hertz_over_the_carrier()
+    {
+        // Closed form: 2σ²Δt over A²/2: 10 log(4·1e-6·1e-8) = -133.98 dBc/Hz; 5143 independent samples scatter by 2 %, 0.09 dB: four of those.
+        ReadingSheet sheet = Measure(new Recording { Interval = 1e-8, Count = 10_000, Noise = 1e-3 }.Take(Source(-40).Signal), 1.003e6 * 1e-8);
+        Assert.Equal(-133.979400086720, Value(sheet, "noise-floor"), 0.35);
+    }
+
+    [Fact]
+    public void Wave_without_anything_beside_it_is_said_to_look_computed()
+    {
+        ReadingSheet sheet = Measure(Source());
+        Assert.Equal("no-noise", sheet.NotMeasured.Single(n => n.Quantity == Quantities.NoiseFloor).Code);
+        Assert.Equal("no-noise", sheet.NotMeasured.Single(n => n.Quantity == Quantities.Sinad).Code);
+    }
+
     private static HarmonicSineSignal Source(params double[] levels) =>
         new(new HarmonicSine { Frequency = 1.003e6, Harmonics = [.. levels.Select((dbc, i) => new HarmonicLine(i + 2, dbc, 50 * i))] });
 

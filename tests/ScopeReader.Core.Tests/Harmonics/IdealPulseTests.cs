@@ -27,4 +27,16 @@ public class IdealPulseTests
     [Fact]
     public void Gaussian_edges_take_off_what_their_transform_says() => // E10, closed form
         Assert.Equal(-0.548648285435028, IdealPulse.GaussianEdgeDb(0.02, 3), 0.002);
+
+    [Theory]
+    [InlineData(0.5)]
+    [InlineData(0.3)]
+    public void Alike_Gaussian_edges_take_the_same_off_whatever_the_duty_factor(double duty) =>
+        // Closed form: c_k of the rectangle times exp(-2π²k²s²). Tolerance: rounding.
+        Assert.Equal(IdealPulse.LevelDbc(duty, 3) + IdealPulse.GaussianEdgeDb(0.02, 3), IdealPulse.EdgedLevelDbc(duty, 0.02, 0.02, 3), 1e-9);
+
+    [Fact]
+    public void Unlike_edges_make_even_harmonics_of_a_square_wave() =>
+        // Closed form: at 50 % and even k the exponentials differ by g_r - g_f alone: (e^(-2π²·4·0.0004) - 1)/2 over (e^(-2π²·0.0004) + 1).
+        Assert.Equal(20 * Math.Log10((1 - Math.Exp(-8 * Math.PI * Math.PI * 4e-4)) / 2 / (1 + Math.Exp(-2 * Math.PI * Math.PI * 4e-4))), IdealPulse.EdgedLevelDbc(0.5, 0.02, 0, 2), 1e-9);
 }

@@ -48,12 +48,16 @@ internal static class ReadingSection
     private static void Harmonics(Sheet sheet, Reading[] harmonics)
     {
         string[] how = [.. harmonics.Select(Phrases.How).Distinct()];
-        sheet.Line(how.Length == 1 ? $"harmonics, dBc ({how[0]})" : "harmonics, dBc");
-        string[] items = [.. harmonics.Select(h => $"{Phrases.HarmonicNumber(h.Quantity)}: {Phrases.Of(h).Replace(Sheet.Joined(" dBc"), "", StringComparison.Ordinal)}{(how.Length == 1 ? "" : $" ({Phrases.How(h)})")}")];
+        bool expected = harmonics.Any(h => h.Expected is not null);
+        sheet.Line((how.Length == 1 ? $"harmonics, dBc ({how[0]})" : "harmonics, dBc") + (expected ? "; in brackets: an ideal pulse of this duty factor and these edges" : ""));
+        string[] items = [.. harmonics.Select(h => $"{Phrases.HarmonicNumber(h.Quantity)}: {Phrases.Of(h).Replace(Sheet.Joined(" dBc"), "", StringComparison.Ordinal)}{(how.Length == 1 ? "" : $" ({Phrases.How(h)})")}{Expected(h)}")];
         int width = items.Max(i => i.Length) + Gap, each = Math.Max(1, (sheet.Width - Gap) / width);
         foreach (string[] line in items.Chunk(each))
             sheet.Indented(string.Concat(line.Select(i => i.PadRight(width))).TrimEnd());
     }
+
+    private static string Expected(Reading harmonic) =>
+        harmonic.Expected is { } level ? string.Create(System.Globalization.CultureInfo.InvariantCulture, $" ({level:F1})") : "";
 
     private static void WriteMissing(Sheet sheet, IReadOnlyList<Reading> readings)
     {

@@ -1,0 +1,16 @@
+namespace ScopeReader.Coverage;
+
+/// <summary>A simulation with a table of its own, chosen by <c>--table NAME</c>.</summary>
+/// <param name="Name">As the command line has it.</param>
+/// <param name="Meaning">What it shows.</param>
+/// <param name="Write">Runs it: number of runs, first seed, where the table goes.</param>
+internal sealed record NamedTable(string Name, string Meaning, Action<int, ulong, TextWriter> Write);
+
+/// <summary>Every such table.</summary>
+internal static class NamedTables
+{
+    public static IReadOnlyList<NamedTable> All { get; } =
+    [
+        new("dbc", "harmonics, distortion, noise and spurs of made sources", DbcTable.Write),
+    ];
+}
