@@ -41,7 +41,7 @@ public static class Analysis
 
     private static Outcome Summary(Plan plan, List<ChannelMeasurement> channels)
     {
-        if (plan.Limits.Count == 0)
+        if (!plan.HasLimits)
             return Outcome.Unjudged;
         HashSet<VerdictOutcome> outcomes = [.. channels.SelectMany(c => c.Verdicts).Select(v => v.Outcome)];
         outcomes.Remove(VerdictOutcome.NotApplicable);

@@ -43,6 +43,12 @@ public sealed record Plan
     /// <summary>The limits.</summary>
     public IReadOnlyList<Limit> Limits { get; init; } = [];
 
+    /// <summary>The limit lines for spectrum traces.</summary>
+    public IReadOnlyList<LimitLine> LimitLines { get; init; } = [];
+
+    /// <summary>True where something is to be judged.</summary>
+    public bool HasLimits => Limits.Count + LimitLines.Count > 0;
+
     /// <summary>The day that ageing is counted to; null where nobody asked.</summary>
     public DateOnly? AsOf { get; init; }
 }

@@ -18,6 +18,8 @@ internal sealed class NoiseReport(HarmonicLines lines)
 
     // A mean rounding error of this share of a step is left by noise of a third of one.
     private const double SpreadSteps = 0.05;
+    // Harmonics of a triangle have 1.5 % of its power.
+    private const double MostDistorted = 0.01;
     private const int MostNamed = 5;
 
     private readonly WaveformJob _job = lines.Job;
@@ -51,7 +53,10 @@ internal sealed class NoiseReport(HarmonicLines lines)
             [BudgetTerm.Normal("noise", u, Decibels.PerRelativeAmplitude / 2 / rest), .. lines.Fundamental.Terms(" of fundamental"), .. lines.RollOff.Terms(2), lines.FrequencyTerm(1)]);
         double sinad = Decibels.OfPowers(_power / rest);
         Add(Quantities.Sinad, sinad, budget, Text($"over the band to {lines.Place(0.5)}"));
-        Add(Quantities.Enob, Distortion.EffectiveBits(sinad), budget.Times(1 / Distortion.DbPerBit), "of this wave, source and instrument together");
+        if (harmonics > MostDistorted * _power)
+            _job.Sheet.Refuse("no-sine", "the wave is no sine: its own harmonics would count as a converter's errors", Quantities.Enob);
+        else
+            Add(Quantities.Enob, Distortion.EffectiveBits(sinad), budget.Times(1 / Distortion.DbPerBit), "of this wave, source and instrument together");
     }
 
     private void WriteStrongest()

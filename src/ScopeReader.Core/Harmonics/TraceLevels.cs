@@ -117,6 +117,27 @@ internal sealed class TraceLevels
         return TraceNoise.Of(around.Count >= FewestForNoise ? around.ToArray() : (double[])_levels.Clone());
     }
 
+    /// <summary>True where a point is higher than its neighbours.</summary>
+    public bool IsTop(int index) => index > 0 && index < _levels.Length - 1 && _levels[index] >= _levels[index - 1] && _levels[index] >= _levels[index + 1];
+
+    /// <summary>True where a point is higher than noise alone would be anywhere on the trace.</summary>
+    public bool StandsOut(int index) => _levels[index] > Noise(index).Threshold(_levels.Length);
+
+    /// <summary>The strongest line after the start of the span; null where none stands out or too few points lie on it.</summary>
+    public TraceLine? Strongest()
+    {
+        int from = AfterFeedThrough(), top = Highest(Math.Min(from, Count - 2), Count - 2);
+        return StandsOut(top) ? Line(top) : null;
+    }
+
+    /// <summary>Uncertainty of one point's level as it stands, dB.</summary>
+    public IEnumerable<BudgetTerm> PointTerms(int index)
+    {
+        TraceNoise noise = Noise(index);
+        yield return BudgetTerm.Normal("noise", noise.Of(Math.Max(noise.MeanDb, _levels[index])));
+        yield return BudgetTerm.Rectangular("level-resolution", _step / 2);
+    }
+
     /// <summary>The line whose highest point is known; null where too few points lie on it.</summary>
     public TraceLine? Line(int top)
     {

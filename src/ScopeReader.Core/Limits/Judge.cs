@@ -20,10 +20,13 @@ public static class Judge
         ArgumentNullException.ThrowIfNull(channel);
         ArgumentNullException.ThrowIfNull(sheet);
         CaptureKinds kind = channel is Waveform ? CaptureKinds.Waveform : CaptureKinds.Spectrum;
+        // First, for a limit may be set on the margins that they give.
+        IEnumerable<Verdict> lines = LineJudge.Channel(plan, channel, sheet);
         var verdicts = new List<Verdict>();
         foreach (Limit limit in plan.Limits)
             if ((limit.Channel ?? plan.Channel ?? channel.Name) == channel.Name)
                 verdicts.Add(Limit(limit, kind, sheet));
+        verdicts.AddRange(lines);
         return verdicts;
     }
 

@@ -27,4 +27,8 @@ public enum VerdictOutcome
 /// <param name="Reading">The reading that was judged; null where there was none.</param>
 /// <param name="Probability">Probability that the true value lies inside the limit; null where a chain term is unknown.</param>
 /// <param name="Reason">Why, in a sentence without a full stop.</param>
-public sealed record Verdict(Limit Limit, VerdictOutcome Outcome, Reading? Reading, double? Probability, string Reason);
+public sealed record Verdict(Limit Limit, VerdictOutcome Outcome, Reading? Reading, double? Probability, string Reason)
+{
+    /// <summary>Where a limit line was judged; null for a limit on a quantity.</summary>
+    public LinePlace? Line { get; init; }
+}

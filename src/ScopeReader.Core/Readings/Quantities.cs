@@ -152,6 +152,9 @@ public static class Quantities
     /// <summary>Level of the strongest line.</summary>
     public static Quantity PeakLevel { get; } = new("peak-level", "dBV", "level of the strongest line of a spectrum trace in volts", "parabola through three levels in dB", Spectrum);
 
+    /// <summary>Margin to a limit line.</summary>
+    public static Quantity LimitLineMargin { get; } = new("limit-line-margin", "dB", "least distance of a spectrum trace from a limit line of the plan, positive inside it", Common, Spectrum);
+
     /// <summary>Every quantity that this program measures.</summary>
     public static IReadOnlyList<Quantity> All { get; } =
     [
@@ -161,7 +164,7 @@ public static class Quantities
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,
         RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude, RingingInductance, RingingCapacitance, DampingResistance,
         FundamentalLevel, FundamentalPower, .. HarmonicTable, WorstHarmonic, Thd, ThdR, Sinad, Enob, Sfdr, NoiseFloor,
-        PeakFrequency, PeakPower, PeakLevel,
+        PeakFrequency, PeakPower, PeakLevel, LimitLineMargin,
     ];
 
     private static readonly Dictionary<string, Quantity> ById = All.ToDictionary(q => q.Id, StringComparer.Ordinal);

@@ -21,12 +21,17 @@ internal sealed record ReadingObject(string Quantity, double Value, string Unit,
 
 internal sealed record BudgetObject(string Term, double Value, string Distribution, double Sensitivity, double Contribution, double? DegreesOfFreedom);
 
-internal sealed record NotMeasuredObject(string Quantity, string Code, string Reason);
+internal sealed record NotMeasuredObject(string Quantity, string Code, string Reason,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtMost,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtLeast);
 
 internal sealed record FindingObject(string Code, string? Value, string Text);
 
 internal sealed record VerdictObject(string Quantity, double? Low, double? High, string Unit, double? Value, double? ExpandedUncertainty, string Rule,
-    double Guard, double? Probability, string Outcome, string Reason);
+    double Guard, double? Probability, string Outcome, string Reason,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] LimitLineObject? LimitLine);
+
+internal sealed record LimitLineObject(string Name, string Side, string Unit, double? Frequency, double? Level, double? LineLevel);
 
 [JsonSourceGenerationOptions(PropertyNamingPolicy = JsonKnownNamingPolicy.CamelCase, NewLine = "\n")]
 [JsonSerializable(typeof(MeasurementDocument))]

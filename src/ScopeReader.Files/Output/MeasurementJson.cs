@@ -55,7 +55,7 @@ public sealed class MeasurementJson(string program, bool explain)
         (double start, double? interval) = Axis(channel);
         return new ChannelObject(channel.Name, OutputWords.Kind(channel), channel.Unit, channel.Segment, channel.Count, interval, start,
             [.. measured.Readings.Select(r => Reading(r, explain))],
-            [.. measured.NotMeasured.Select(n => new NotMeasuredObject(n.Quantity.Id, n.Code, n.Reason))],
+            [.. measured.NotMeasured.Select(n => new NotMeasuredObject(n.Quantity.Id, n.Code, n.Reason, Finite(n.AtMost), Finite(n.AtLeast)))],
             [.. measured.Findings.Select(f => new FindingObject(f.Code, f.Value, f.Text))],
             [.. measured.Verdicts.Select(Verdict)]);
     }
@@ -91,7 +91,10 @@ public sealed class MeasurementJson(string program, bool explain)
     private static VerdictObject Verdict(Verdict verdict) =>
         new(verdict.Limit.Quantity.Id, verdict.Limit.Low, verdict.Limit.High, OutputWords.Unit(verdict), verdict.Reading?.Value,
             Finite(verdict.Reading?.Budget.ExpandedUncertainty), OutputWords.Of(verdict.Limit.Rule), verdict.Limit.Guard, Finite(verdict.Probability),
-            OutputWords.Of(verdict.Outcome), verdict.Reason);
+            OutputWords.Of(verdict.Outcome), verdict.Reason, verdict.Line is { } place ? Line(place) : null);
+
+    private static LimitLineObject Line(LinePlace place) =>
+        new(place.Line.Name, OutputWords.Of(place.Line.Side), place.Line.Unit, Finite(place.Frequency), Finite(place.Level), Finite(place.LineLevel));
 
     // JSON has no infinity: infinitely many degrees of freedom, or an uncertainty that overflowed, is null.
     private static double? Finite(double? value) => value is { } v && double.IsFinite(v) ? v : null;

@@ -32,6 +32,9 @@ public static class OutputWords
     /// <summary>guarded or simple.</summary>
     public static string Of(DecisionRule rule) => rule == DecisionRule.Simple ? "simple" : "guarded";
 
+    /// <summary>upper or lower.</summary>
+    public static string Of(LineSide side) => side == LineSide.Lower ? "lower" : "upper";
+
     /// <summary>normal or rectangular.</summary>
     public static string Of(Distribution distribution) => distribution == Distribution.Rectangular ? "rectangular" : "normal";
 

@@ -10,10 +10,10 @@ public static partial class PlanKeyList
     internal const string Chain = "chain", Levels = "levels", Import = "import", Conditions = "conditions", Limit = "limit", LimitLine = "limit-line";
 
     /// <summary>Every key outside [conditions], whose names are the person's own.</summary>
-    public static IReadOnlyList<PlanKey> All { get; } = [.. TopKeys(), .. ChainKeys(), .. LevelKeys(), .. ImportKeys(), .. LimitKeys()];
+    public static IReadOnlyList<PlanKey> All { get; } = [.. TopKeys(), .. ChainKeys(), .. LevelKeys(), .. ImportKeys(), .. LimitKeys(), .. LimitLineKeys()];
 
     /// <summary>Every table, as its name stands between the brackets.</summary>
-    public static IReadOnlyList<string> Tables { get; } = [Chain, Levels, Import, Conditions, Limit];
+    public static IReadOnlyList<string> Tables { get; } = [Chain, Levels, Import, Conditions, Limit, LimitLine];
 
     internal static IEnumerable<string> NamesIn(string table) => All.Where(k => k.Table == table).Select(k => k.Name);
 
@@ -48,6 +48,17 @@ public static partial class PlanKeyList
         yield return new PlanKey(Limit, "rule", "\"guarded\"", "guarded (inside the limit by the uncertainty) or simple (on the value alone); guarded");
         yield return new PlanKey(Limit, "guard", "1", "guard band over expanded uncertainty; 1");
         yield return new PlanKey(Limit, "channel", "\"CH1\"", "judges this channel only; every channel of the kind");
+    }
+
+    private static IEnumerable<PlanKey> LimitLineKeys()
+    {
+        yield return new PlanKey(LimitLine, "name", "\"harmonics\"", "what you call the line");
+        yield return new PlanKey(LimitLine, "unit", "\"dBm\"", "unit of the levels: dBm, dBc, dBµV or dBV");
+        yield return new PlanKey(LimitLine, "points", "[[\"1 MHz\", -40], [\"30 MHz\", -60]]", "frequency and level of each point, frequencies rising; two at one frequency make a step");
+        yield return new PlanKey(LimitLine, "side", "\"upper\"", "upper (levels stay below the line) or lower; upper");
+        yield return new PlanKey(LimitLine, "interpolation", "\"linear\"", "linear or log in frequency between the points; linear");
+        yield return new PlanKey(LimitLine, "rule", "\"guarded\"", "guarded (inside the line by the uncertainty) or simple (on the value alone); guarded");
+        yield return new PlanKey(LimitLine, "guard", "1", "guard band over expanded uncertainty; 1");
     }
 
     private static LevelSettings References(LevelSettings levels, PlanValue value)

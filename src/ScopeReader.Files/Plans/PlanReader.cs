@@ -51,7 +51,7 @@ public static class PlanReader
         foreach (PlanSection section in document.Sections)
         {
             CheckTable(section, file);
-            if (section.Name is not PlanKeyList.Limit)
+            if (section.Name is not (PlanKeyList.Limit or PlanKeyList.LimitLine))
                 foreach ((string key, PlanValue value) in section.Entries)
                     plan = section.Name == PlanKeyList.Conditions ? AddCondition(plan, key, value) : Apply(plan, section.Name, key, value);
         }
@@ -59,7 +59,8 @@ public static class PlanReader
         CheckLevels(plan.Levels, document);
         // Limits come last: they are held against the other tables, wherever those stand.
         Limit[] limits = [.. document.Sections.Where(s => s.Name == PlanKeyList.Limit).Select(s => LimitReader.Read(s, plan, file))];
-        return plan with { Limits = limits };
+        LimitLine[] lines = [.. document.Sections.Where(s => s.Name == PlanKeyList.LimitLine).Select(s => LimitLineReader.Read(s, file))];
+        return plan with { Limits = limits, LimitLines = lines };
     }
 
     private static Plan Apply(Plan plan, string table, string key, PlanValue value)
@@ -78,12 +79,10 @@ public static class PlanReader
     {
         if (section.Name == PlanDocument.Top)
             return;
-        if (section.Name == PlanKeyList.LimitLine)
-            throw new PlanException(file, section.Line, "limit lines are not judged by this version; set [[limit]] on quantities, such as peak-power or worst-harmonic, in their place");
         if (!PlanKeyList.Tables.Contains(section.Name))
             throw new PlanException(file, section.Line, $"unknown table \"{section.Name}\"; {NearestWord.Hint(section.Name, PlanKeyList.Tables)}");
-        if (section.IsList != (section.Name == PlanKeyList.Limit))
-            throw new PlanException(file, section.Line, section.IsList ? $"expected [{section.Name}], found [[{section.Name}]]" : "expected [[limit]], with two brackets, found [limit]");
+        if (section.IsList != (section.Name is PlanKeyList.Limit or PlanKeyList.LimitLine))
+            throw new PlanException(file, section.Line, section.IsList ? $"expected [{section.Name}], found [[{section.Name}]]" : $"expected [[{section.Name}]], with two brackets, found [{section.Name}]");
     }
 
     private static void CheckLevels(LevelSettings levels, PlanDocument document)

@@ -88,9 +88,10 @@ internal sealed class PlanValue(string file, string key, int line, ValueSyntax s
         : throw Wrong($"expected a list in [ ], found {Found}");
 
     /// <summary>A percentage: a plain number, or text with its unit.</summary>
-    public double Percent() => Plain is { } plain && double.TryParse(plain, NumberStyles.Float, CultureInfo.InvariantCulture, out double value) && double.IsFinite(value)
-        ? value
-        : Amount("%");
+    public double Percent() => Number() ?? Amount("%");
+
+    /// <summary>A plain number; null where it is text.</summary>
+    public double? Number() => Plain is { } plain && double.TryParse(plain, NumberStyles.Float, CultureInfo.InvariantCulture, out double value) && double.IsFinite(value) ? value : null;
 
     /// <summary>The value as the file has it, short enough for a line.</summary>
     public string Found

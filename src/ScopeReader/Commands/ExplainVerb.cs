@@ -65,7 +65,7 @@ internal static class ExplainVerb
     {
         foreach (IGrouping<string, PlanKey> table in keys.GroupBy(k => k.Table))
         {
-            sheet.Heading(table.Key switch { "" => "plan, at the top", "limit" => "plan, [[limit]], one for each", var name => $"plan, [{name}]" });
+            sheet.Heading(table.Key switch { "" => "plan, at the top", "limit" or "limit-line" => $"plan, [[{table.Key}]], one for each", var name => $"plan, [{name}]" });
             foreach (PlanKey key in table)
             {
                 sheet.Line($"{key.Name} = {key.Example}");

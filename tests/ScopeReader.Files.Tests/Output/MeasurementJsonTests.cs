@@ -73,6 +73,20 @@ public class MeasurementJsonTests
     }
 
     [Fact]
+    public void Limit_line_has_its_place_beside_the_verdicts_own_fields()
+    {
+        var line = new LimitLine("mask", "dBm", [(1e6, -40), (2e6, -50)]);
+        var margin = new Reading(Quantities.LimitLineMargin, 2.5, "dB", new Budget([BudgetTerm.Normal("noise", 0.1)]), "limit-line");
+        var verdict = new Verdict(new Limit(Quantities.LimitLineMargin, 0, null), VerdictOutcome.Pass, margin, 1, "inside") { Line = new LinePlace(line, 1.5e6, -47.5, -45) };
+        var trace = new SpectrumTrace("trace 1", "dBm", [1e6, 1.5e6, 2e6], [-60, -47.5, -60]);
+        JsonElement written = Parse(MeasurementJson.Line(Made.File("a.csv", Made.Channel(trace, [margin], verdict)), explain: false)).GetProperty("channels")[0].GetProperty("verdicts")[0];
+        Assert.Equal(("limit-line-margin", 0d, "dB", 2.5), (written.GetProperty("quantity").GetString(), written.GetProperty("low").GetDouble(), written.GetProperty("unit").GetString(), written.GetProperty("value").GetDouble()));
+        JsonElement place = written.GetProperty("limitLine");
+        Assert.Equal(("mask", "upper", "dBm", 1.5e6, -47.5, -45d), (place.GetProperty("name").GetString(), place.GetProperty("side").GetString(), place.GetProperty("unit").GetString(),
+            place.GetProperty("frequency").GetDouble(), place.GetProperty("level").GetDouble(), place.GetProperty("lineLevel").GetDouble()));
+    }
+
+    [Fact]
     public void Budgets_are_there_only_where_they_were_asked_for() =>
         Assert.False(Parse(Document([Sample()], explain: false)).GetProperty("captures")[0].GetProperty("channels")[0].GetProperty("readings")[0].TryGetProperty("budget", out _));
 

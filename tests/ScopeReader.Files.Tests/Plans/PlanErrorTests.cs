@@ -51,7 +51,6 @@ public class PlanErrorTests
     [InlineData("[limit]\nquantity = \"thd\"\nhigh = \"1 %\"", "plan.toml, line 1: expected [[limit]], with two brackets, found [limit]")]
     [InlineData("[[chain]]\nbits = 8", "plan.toml, line 1: expected [chain], found [[chain]]")]
     [InlineData("[[limit]]\nquantity = \"harmonic-12\"\nhigh = \"-40 dBc\"", "plan.toml, line 2: quantity: harmonic-12 is beyond the harmonics that are looked for, 2 to 10; add harmonics = 12 to [levels]")]
-    [InlineData("subject = \"a\"\n[[limit-line]]\nname = \"mask\"", "plan.toml, line 2: limit lines are not judged by this version; set [[limit]] on quantities, such as peak-power or worst-harmonic, in their place")]
     [InlineData("[chain]\nbits = 8\ntimebase-reads = \"1 ppm\"", "plan.toml, line 3: timebase-reads: needs timebase-uncertainty beside it, its standard uncertainty")]
     [InlineData("[chain]\ntimebase-uncertainty = \"1 ppm\"", "plan.toml, line 2: timebase-uncertainty: needs timebase-reads beside it, the error that was found")]
     [InlineData("[chain]\ntimebase-ageing = \"1 ppm/year\"", "plan.toml, line 2: timebase-ageing: needs timebase-calibrated beside it, the day it counts from")]

@@ -6,11 +6,15 @@ namespace ScopeReader.Tests.Plans;
 public class PlanLawTests
 {
     private static readonly string Whole = string.Join('\n', PlanKeyList.All.GroupBy(k => k.Table).Select(t =>
-        (t.Key switch { "" => "", "limit" => "[[limit]]\n", var name => $"[{name}]\n" }) + string.Join('\n', t.Where(k => k.Name != "rate").Select(k => $"{k.Name} = {k.Example}"))))
+        (t.Key switch { "" => "", "limit" or "limit-line" => $"[[{t.Key}]]\n", var name => $"[{name}]\n" }) + string.Join('\n', t.Where(k => k.Name != "rate").Select(k => $"{k.Name} = {k.Example}"))))
         + "\n[conditions]\nsupply = \"5 V\"\n";
 
     [Fact]
-    public void A_plan_with_every_key_is_read() => Assert.Single(PlanReader.Parse(Whole, "plan.toml").Limits);
+    public void A_plan_with_every_key_is_read()
+    {
+        Assert.Single(PlanReader.Parse(Whole, "plan.toml").Limits);
+        Assert.Single(PlanReader.Parse(Whole, "plan.toml").LimitLines);
+    }
 
     // Whatever a person's editor leaves behind: the plan is read, or refused with its line; nothing else comes out.
     [Fact]

@@ -35,9 +35,9 @@ internal static class MeasurementTable
     /// <summary>Why no limit of the plan concerned the capture; null where one did, or none is set.</summary>
     public static string? NoneApplied(Measurement measurement, Plan plan)
     {
-        if (plan.Limits.Count == 0 || measurement.Channels.Any(c => c.Verdicts.Any(v => v.Outcome != Limits.VerdictOutcome.NotApplicable)))
+        if (!plan.HasLimits || measurement.Channels.Any(c => c.Verdicts.Any(v => v.Outcome != Limits.VerdictOutcome.NotApplicable)))
             return null;
-        string[] wanted = [.. plan.Limits.Select(l => l.Channel ?? plan.Channel).OfType<string>().Distinct().Where(n => measurement.Channels.All(c => c.Channel.Name != n))];
+        string[] wanted = [.. plan.Limits.Select(l => l.Channel ?? plan.Channel).Append(plan.LimitLines.Count > 0 ? plan.Channel : null).OfType<string>().Distinct().Where(n => measurement.Channels.All(c => c.Channel.Name != n))];
         return wanted.Length == 0
             ? "NOT JUDGED  none of the plan's limits is on a quantity that this kind of capture has"
             : $"NOT JUDGED  the plan's limits are for {SafeText.Of(string.Join(", ", wanted))}, and this capture has {SafeText.Of(string.Join(", ", measurement.Channels.Select(c => c.Channel.Name)))}";

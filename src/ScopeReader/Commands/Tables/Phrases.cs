@@ -58,8 +58,17 @@ internal static class Phrases
     }
 
     /// <summary>A verdict after its word: the quantity, the reading, the limit.</summary>
-    public static string Of(Verdict verdict) =>
+    public static string Of(Verdict verdict) => verdict.Line is { } place ? Of(verdict, place) :
         $"{verdict.Limit.Quantity}{(verdict.Reading is { } reading ? " " + Of(reading) : "")}, {Of(verdict.Limit, OutputWords.Unit(verdict))}";
+
+    // "limit line "mask": margin 2.3 ± 0.8 dB at 20.3 MHz, -52.3 dBm for at most -50 dBm".
+    private static string Of(Verdict verdict, LinePlace place)
+    {
+        string name = $"limit line \"{SafeText.Of(place.Line.Name)}\"", unit = place.Line.Unit;
+        string rule = verdict.Limit.Rule == DecisionRule.Simple ? ", simple rule" : verdict.Limit.Guard == 1 ? "" : string.Create(CultureInfo.InvariantCulture, $", guard {verdict.Limit.Guard:G4}");
+        return verdict.Reading is not { } reading ? name + rule
+            : $"{name}: margin {Of(reading)} at {Number(place.Frequency, "Hz", 5)}, {Sheet.Joined(string.Create(CultureInfo.InvariantCulture, $"{place.Level:F2} {unit}"))} for at {(place.Line.Side == LineSide.Upper ? "most" : "least")} {Number(place.LineLevel, unit, 5)}{rule}";
+    }
 
     /// <summary>What a channel holds: "100000 samples, 10 ns apart".</summary>
     public static string Of(Channel channel) => channel switch
