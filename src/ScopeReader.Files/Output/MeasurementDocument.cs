@@ -22,8 +22,8 @@ internal sealed record ReadingObject(string Quantity, double Value, string Unit,
 internal sealed record BudgetObject(string Term, double Value, string Distribution, double Sensitivity, double Contribution, double? DegreesOfFreedom);
 
 internal sealed record NotMeasuredObject(string Quantity, string Code, string Reason,
-    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtMost,
-    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtLeast);
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtMost = null,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtLeast = null);
 
 internal sealed record FindingObject(string Code, string? Value, string Text);
 
