@@ -56,6 +56,7 @@ internal sealed class DistortionReport(HarmonicLines lines)
                 .. lines.Fundamental.Terms(" of fundamental"),
                 .. lines.RollOff.Terms(strongest),
                 lines.FrequencyTerm(strongest),
+                .. lines.Smear.Terms(strongest),
             ]);
         // From dB to parts: d(thd) = thd · ln 10/20 · dB; THD_R changes with THD_F by (1 + THD_F²)^(-3/2).
         Budget parts = budget.Times(100 * thd / Decibels.PerRelativeAmplitude);

@@ -31,9 +31,14 @@ public static class HarmonicAnalyser
             RefuseAll(job, wanted, "no-frequency", "harmonics are counted from the frequency of the wave, and it has none");
             return;
         }
-        if (job.Sheet.Findings.Any(f => f.Code == "clipping-suspected"))
+        if (job.Fitness.IsClipped)
         {
             RefuseAll(job, wanted, "clipped", "the wave is cut off, which makes harmonics of its own and takes from the fundamental; use a larger vertical range");
+            return;
+        }
+        if (Smear.Refusal(job.Fitness) is { } unsteady)
+        {
+            RefuseAll(job, wanted, "unsteady", unsteady);
             return;
         }
         double f = frequency.CyclesPerSample, cycles = f * count;

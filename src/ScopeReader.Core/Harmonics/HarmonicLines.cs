@@ -14,6 +14,7 @@ internal sealed class HarmonicLines
         Harmonics = [.. Enumerable.Range(1, counts.Fitted).Select(k => levels[k])];
         double? fundamental = job.Waveform.Axis.IsTimed ? levels.Frequency / job.Waveform.Interval : null;
         RollOff = new RollOff(job.Plan.Chain, fundamental);
+        Smear = Smear.Of(job.Fitness);
         Others = [.. levels.Rest.Lines.Select(line => new OtherLine(line, OrderOf(line.Frequency, line.FrequencyUncertainty, line.Amplitude)))];
     }
 
@@ -36,6 +37,8 @@ internal sealed class HarmonicLines
 
     public RollOff RollOff { get; }
 
+    public Smear Smear { get; }
+
     /// <summary>Where a line of the record shows, in words.</summary>
     public string Place(double cyclesPerSample) =>
         Engineering.Format(cyclesPerSample * Job.Chain.FrequencyFactor / Job.Waveform.Interval, Job.Waveform.Axis.FrequencyUnit, 5);
@@ -53,7 +56,7 @@ internal sealed class HarmonicLines
 
     /// <summary>The terms of a harmonic's level relative to the fundamental, dB.</summary>
     public IEnumerable<BudgetTerm> Terms(HarmonicLevel line) =>
-        [.. line.Terms(), .. Fundamental.Terms(" of fundamental"), .. RollOff.Terms(line.Order), FrequencyTerm(line.Order)];
+        [.. line.Terms(), .. Fundamental.Terms(" of fundamental"), .. RollOff.Terms(line.Order), FrequencyTerm(line.Order), .. Smear.Terms(line.Order)];
 
     // Of so many orders that are tried, one in a hundred or fewer may fit by chance.
     private int? OrderOf(double frequency, double uncertainty, double amplitude)

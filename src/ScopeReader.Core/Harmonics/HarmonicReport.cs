@@ -36,7 +36,7 @@ internal sealed class HarmonicReport(HarmonicLines lines)
             return;
         }
         double volts = lines.Fundamental.Amplitude / Math.Sqrt(2);
-        Budget budget = _job.Chain.ForAbsoluteDecibels([.. lines.Fundamental.Terms(), .. lines.RollOff.Terms(1), lines.FrequencyTerm(1)]);
+        Budget budget = _job.Chain.ForAbsoluteDecibels([.. lines.Fundamental.Terms(), .. lines.RollOff.Terms(1), lines.FrequencyTerm(1), .. lines.Smear.Terms(1)]);
         Add(Quantities.FundamentalLevel, Decibels.OfAmplitudes(volts), budget);
         if (_job.Plan.Chain.Impedance is { } ohms)
             Add(Quantities.FundamentalPower, Decibels.DbmOfVolts(volts, ohms), budget);
@@ -46,6 +46,11 @@ internal sealed class HarmonicReport(HarmonicLines lines)
 
     private Reading? Harmonic(HarmonicLevel line, Quantity quantity)
     {
+        if (lines.Smear.Blurs(line.Order))
+        {
+            _job.Sheet.Refuse("unsteady", Text($"the wave's phase wanders by {line.Order * lines.Smear.PhaseCycles:G2} cycles of this harmonic, which smears it; capture a shorter stretch"), quantity);
+            return null;
+        }
         if (line.IsResolved)
             return new Reading(quantity, lines.Dbc(line.Amplitude), "dBc", _job.Chain.ForRelativeDecibels(lines.Terms(line)), Method)
             {

@@ -126,11 +126,41 @@ public class HarmonicAnalyserTests
     [Fact]
     public void Clipped_wave_has_no_harmonics_of_its_own()
     {
-        var sheet = new ReadingSheet();
-        sheet.Add(new Finding("clipping-suspected", "made", "top"));
-        Measure(new Recording { Interval = 1e-8, Count = 10_000 }.Take(Source(-40).Signal), 1.003e6 * 1e-8, Known, sheet);
+        ReadingSheet sheet = Measure(new WaveFitness(null, ClippedEnds.Top));
         Assert.Empty(sheet.Readings);
         Assert.All(sheet.NotMeasured, n => Assert.Equal("clipped", n.Code));
+    }
+
+    [Theory]
+    [InlineData(SteadinessKind.NotPeriodic, 0, 0)]
+    [InlineData(SteadinessKind.Interrupted, 0, 0)]
+    [InlineData(SteadinessKind.AmplitudeModulated, 0, 0.3)]
+    [InlineData(SteadinessKind.PhaseModulated, 0.08, 0)] // (2π·0.08)²/2 = 13 % of the fundamental may be lost.
+    public void Wave_that_does_not_hold_still_has_no_harmonics(SteadinessKind kind, double phase, double range)
+    {
+        ReadingSheet sheet = Measure(new WaveFitness(new Steadiness(kind) { PhaseExcursion = phase, AmplitudeRange = range, Absent = 0.25 }, ClippedEnds.None));
+        Assert.Empty(sheet.Readings);
+        Assert.All(sheet.NotMeasured, n => Assert.Equal("unsteady", n.Code));
+    }
+
+    [Fact]
+    public void Small_wander_is_a_term_that_grows_as_the_square_of_the_order()
+    {
+        // (2πk·0.002)²/2 of the amplitude at most: 8.686·7.9e-5·k² dB.
+        ReadingSheet sheet = Measure(new WaveFitness(new Steadiness(SteadinessKind.Drifting) { PhaseExcursion = 0.002 }, ClippedEnds.None));
+        double half = 8.685889638 * Math.Pow(2 * Math.PI * 0.002, 2) / 2;
+        Assert.Equal(4 * half / Math.Sqrt(3), Terms(sheet, "harmonic-2").Single(t => t.Name == "unsteady wave").Contribution, 1e-9);
+        Assert.Equal(16 * half / Math.Sqrt(3), Terms(sheet, "harmonic-4").Single(t => t.Name == "unsteady wave").Contribution, 1e-9);
+    }
+
+    private static ReadingSheet Measure(WaveFitness fitness)
+    {
+        var sheet = new ReadingSheet();
+        Waveform waveform = new Recording { Interval = 1e-8, Count = 10_000, Noise = 1e-5 }.Take(Source(-40, -55, -60).Signal);
+        var plan = new Plan { Chain = Known };
+        HarmonicAnalyser.Measure(new WaveformJob(waveform, plan, new ChainErrors(plan, waveform.Axis), sheet, CancellationToken.None) { Fitness = fitness },
+            new FrequencyEstimate("made", 1.003e6 * 1e-8, [BudgetTerm.Normal("made", 1e-12)], 1));
+        return sheet;
     }
 
     [Fact]
