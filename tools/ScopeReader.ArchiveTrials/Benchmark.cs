@@ -47,6 +47,21 @@ internal static class Benchmark
         Console.WriteLine(FormattableString.Invariant($"find {what}: {matches} matches, first 100 in {times[4]:F1} ms (median of 9; {busy:F1} ms of processor each)"));
     }
 
+    // What adding a capture takes, part by part, on one thread.
+    private static void Parts(NewEntry[] entries)
+    {
+        double Each(Action<NewEntry> work)
+        {
+            work(entries[0]);
+            var watch = Stopwatch.StartNew();
+            foreach (NewEntry entry in entries.AsSpan(0, 200))
+                work(entry);
+            return watch.Elapsed.TotalMilliseconds / 200;
+        }
+        double hash = Each(e => System.Security.Cryptography.SHA256.HashData(e.Bytes.Span)), pack = Each(e => CapturePacker.Pack(e.Bytes.Span)), prepare = Each(e => MeasurementArchive.Prepare([e]));
+        Console.WriteLine(FormattableString.Invariant($"of that, one thread: hash {hash:F2} ms, pack {pack:F2} ms, all that needs no archive {prepare:F2} ms a capture"));
+    }
+
     private static void Add(string path)
     {
         const int Count = 1000, Samples = 10_000, BatchSize = 50;
@@ -65,13 +80,22 @@ internal static class Benchmark
             Console.WriteLine(FormattableString.Invariant(
                 $"add {Count} measured captures of {Samples} samples ({bytes / 1e6:F0} MB), {BatchSize} a transaction: {seconds:F2} s ({busy:F2} s of processor), {Count / seconds:F0} a second, {new FileInfo(path).Length / 1e6:F1} MB"));
         }
+        Parts(entries);
         foreach (string file in (string[])[path, path + "-wal", path + "-shm"])
             File.Delete(file);
     }
 
     private static void Pack()
     {
-        (byte[] bytes, _) = MadeCapture.Text(1, 1_000_000);
+        Pack("10 digits", "0.000000000e+00", "0.000e+00");
+        Pack("as few digits as give it back", "R", "R");
+        Pack("17 digits", "G17", "G17");
+        Pack("19 digits", "E18", "E18");
+    }
+
+    private static void Pack(string what, string time, string value)
+    {
+        (byte[] bytes, _) = MadeCapture.Text(1, 1_000_000, time, value);
         CapturePacker.Pack(bytes);
         var watch = Stopwatch.StartNew();
         byte[] packed = CapturePacker.Pack(bytes);
@@ -79,6 +103,6 @@ internal static class Benchmark
         watch.Restart();
         bool same = CapturePacker.Unpack(packed).AsSpan().SequenceEqual(bytes);
         Console.WriteLine(FormattableString.Invariant(
-            $"pack 1,000,000 samples of 8 bits: {bytes.Length} bytes to {packed.Length} ({100.0 * packed.Length / bytes.Length:F2} %) in {packing:F0} ms, back in {watch.Elapsed.TotalMilliseconds:F0} ms, the same bytes: {(same ? "yes" : "no")}"));
+            $"pack 1,000,000 samples of 8 bits, {what}: {bytes.Length} bytes to {packed.Length} ({100.0 * packed.Length / bytes.Length:F2} %) in {packing:F0} ms, back in {watch.Elapsed.TotalMilliseconds:F0} ms, the same bytes: {(same ? "yes" : "no")}"));
     }
 }

@@ -21,7 +21,11 @@ public static class MadeCapture
     ];
 
     /// <summary>The capture's text and samples.</summary>
-    public static (byte[] Bytes, double[] Samples) Text(int seed, int samples)
+    /// <param name="seed">Which one.</param>
+    /// <param name="samples">How many.</param>
+    /// <param name="time">How times are written, as .NET's formats say it.</param>
+    /// <param name="value">How voltages are written.</param>
+    public static (byte[] Bytes, double[] Samples) Text(int seed, int samples, string time = "0.000000000e+00", string value = "0.000e+00")
     {
         var random = new Random(seed);
         double error = random.NextDouble() * 1e-4, phase = random.NextDouble();
@@ -34,7 +38,7 @@ public static class MadeCapture
             double noise = Math.Sqrt(-2 * Math.Log(1 - random.NextDouble())) * Math.Cos(2 * Math.PI * random.NextDouble()) * 0.03;
             double level = (cycle - Math.Floor(cycle) < 0.5 ? 3.3 : 0) + noise;
             volts[i] = Math.Clamp(Math.Round(level / Step), -20, 235) * Step;
-            text.Append(CultureInfo.InvariantCulture, $"{i * Interval - 1e-5:0.000000000e+00},{volts[i]:0.000e+00}\n");
+            text.Append((i * Interval - 1e-5).ToString(time, CultureInfo.InvariantCulture)).Append(',').Append(volts[i].ToString(value, CultureInfo.InvariantCulture)).Append('\n');
         }
         return (Encoding.UTF8.GetBytes(text.ToString()), volts);
     }

@@ -19,7 +19,8 @@ internal sealed record NumberFormat(byte[] Before, byte[] After, byte Sign, byte
     /// <summary>Longest text that is taken for a number.</summary>
     public const int LongestText = 48;
 
-    private const int MostDigits = 18;
+    /// <summary>Most digits after the mark.</summary>
+    public const int MostDigits = NumberText.MostSignificant;
 
     private static readonly long[] PowersOfTen = MakePowers();
 
@@ -29,7 +30,7 @@ internal sealed record NumberFormat(byte[] Before, byte[] After, byte Sign, byte
         (mantissa, exponent) = (0, NoExponent);
         if (field.Length > LongestText || !field.StartsWith(Before) || !field.EndsWith(After) || field.Length < Before.Length + After.Length)
             return false;
-        if (!NumberText.TryRead(field[Before.Length..^After.Length], out NumberText text) || text.Decimals > Decimals || text.Digits + Decimals - text.Decimals > MostDigits)
+        if (!NumberText.TryRead(field[Before.Length..^After.Length], out NumberText text) || text.Decimals > Decimals || text.Significant + Decimals - text.Decimals > MostDigits)
             return false;
         mantissa = text.Mantissa * PowersOfTen[Decimals - text.Decimals];
         if (text.Negative)
@@ -75,7 +76,8 @@ internal sealed record NumberFormat(byte[] Before, byte[] After, byte Sign, byte
         return at + After.Length;
     }
 
-    private int WriteExponent(Span<byte> text, int exponent)
+    /// <summary>Writes an exponent with its mark.</summary>
+    public int WriteExponent(Span<byte> text, int exponent)
     {
         int at = 0, size = Math.Abs(exponent);
         text[at++] = Mark;

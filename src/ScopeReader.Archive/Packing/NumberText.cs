@@ -1,9 +1,12 @@
 namespace ScopeReader.Archive.Packing;
 
-/// <summary>What a number's text consists of.</summary>
-internal readonly record struct NumberText(bool Negative, byte Sign, byte Point, long Mantissa, int Digits, int Decimals, bool LeadingDigit,
+/// <summary>What a number's text consists of. The mantissa holds where there are <see cref="MostSignificant"/> digits or fewer.</summary>
+internal readonly record struct NumberText(bool Negative, byte Sign, byte Point, long Mantissa, int Significant, int Decimals, bool LeadingDigit,
     bool HasExponent, byte Mark, int Exponent, int ExponentDigits, bool ExponentPlus)
 {
+    /// <summary>As many digits as a whole number of 64 bits always holds.</summary>
+    public const int MostSignificant = 18;
+
     /// <summary>Takes a number apart; false where it is none, or one that is too long.</summary>
     public static bool TryRead(ReadOnlySpan<byte> text, out NumberText number)
     {
@@ -11,16 +14,18 @@ internal readonly record struct NumberText(bool Negative, byte Sign, byte Point,
         int at = 0;
         byte sign = text.Length > 0 && text[0] is (byte)'-' or (byte)'+' ? text[at++] : (byte)0;
         long mantissa = 0;
-        int digits = 0, decimals = 0, whole = 0;
+        int digits = 0, zeros = 0, decimals = 0, whole = 0;
         byte point = 0;
         for (; at < text.Length; at++)
         {
             byte c = text[at];
             if (c is >= (byte)'0' and <= (byte)'9')
             {
-                if (++digits > 18)
+                if (++digits > NumberFormat.LongestText)
                     return false;
-                mantissa = 10 * mantissa + (c - '0');
+                if (c == '0' && zeros == digits - 1)
+                    zeros++;
+                mantissa = unchecked(10 * mantissa + (c - '0'));
                 if (point != 0)
                     decimals++;
                 else
@@ -50,7 +55,7 @@ internal readonly record struct NumberText(bool Negative, byte Sign, byte Point,
         }
         if (at != text.Length)
             return false;
-        number = new NumberText(sign == '-', sign, point, mantissa, digits, decimals, whole > 0, hasExponent, mark, exponent, exponentDigits, plus);
+        number = new NumberText(sign == '-', sign, point, mantissa, digits - zeros, decimals, whole > 0, hasExponent, mark, exponent, exponentDigits, plus);
         return true;
     }
 }

@@ -7,7 +7,7 @@ namespace ScopeReader.Archive.Packing;
 internal sealed class WordList
 {
     // What a row may cost: more different texts than this and the list outweighs what it saves.
-    private const int RowsPerWord = 4, MostWords = 1 << 16, LongestWord = 16;
+    private const int RowsPerWord = 4, MostWords = 1 << 16, LongestWord = 32;
 
     private WordList(byte[] text, int count, long[] indices) => (Text, Count, Indices) = (text, count, indices);
 
@@ -28,7 +28,7 @@ internal sealed class WordList
     public static WordList? TryMake(ReadOnlySpan<byte> block, TextTable table, int column)
     {
         int allowed = Math.Min(MostWords, 16 + table.Rows / RowsPerWord);
-        var numbers = new Dictionary<UInt128, int>();
+        var numbers = new Dictionary<WordKey, int>();
         var words = new List<byte[]>();
         var indices = new long[table.Rows];
         for (int row = 0; row < table.Rows; row++)
@@ -62,15 +62,17 @@ internal sealed class WordList
         return new WordList(text.ToArray(), words.Count, indices);
     }
 
-    // Up to fifteen bytes and their number: no two fields share a key.
-    private static UInt128 Key(ReadOnlySpan<byte> field)
+    // Up to 31 bytes and their number: no two fields share a key.
+    private static WordKey Key(ReadOnlySpan<byte> field)
     {
         Span<byte> key = stackalloc byte[LongestWord];
         key.Clear();
         field.CopyTo(key);
         key[^1] = (byte)field.Length;
-        return MemoryMarshal.Read<UInt128>(key);
+        return MemoryMarshal.Read<WordKey>(key);
     }
+
+    private readonly record struct WordKey(UInt128 Start, UInt128 End);
 
     private static double ValueOf(ReadOnlySpan<byte> word) =>
         Utf8Parser.TryParse(word.TrimStart((byte)' '), out double value, out _) ? value : double.NegativeInfinity;
