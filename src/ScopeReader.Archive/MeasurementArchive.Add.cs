@@ -1,3 +1,4 @@
+using System.Runtime.ExceptionServices;
 using System.Security.Cryptography;
 using System.Text.Json;
 using ScopeReader.Archive.Contents;
@@ -28,14 +29,23 @@ public sealed partial class MeasurementArchive
         return Guard(() => _database.Write(() => (IReadOnlyList<Added>)[.. prepared.Entries.Select(Write)]));
     }
 
-    /// <summary>Does the work of adding that needs no archive: hashing, compressing. Any thread may do it.</summary>
+    /// <summary>Does the work of adding that needs no archive: hashing, compressing. Any thread may do it; it uses all cores.</summary>
     /// <param name="entries">At most <see cref="LargestBatch"/>.</param>
     /// <exception cref="ArgumentException">Too many, or a measurement of other bytes.</exception>
     public static PreparedEntries Prepare(IReadOnlyList<NewEntry> entries)
     {
         ArgumentNullException.ThrowIfNull(entries);
         ArgumentOutOfRangeException.ThrowIfGreaterThan(entries.Count, LargestBatch);
-        return new PreparedEntries([.. entries.Select(Prepare)]);
+        var prepared = new PreparedEntry[entries.Count];
+        try
+        {
+            Parallel.For(0, prepared.Length, i => prepared[i] = Prepare(entries[i]));
+        }
+        catch (AggregateException faults)
+        {
+            ExceptionDispatchInfo.Throw(faults.InnerExceptions[0]);
+        }
+        return new PreparedEntries(prepared);
     }
 
     private static PreparedEntry Prepare(NewEntry entry)
@@ -45,7 +55,7 @@ public sealed partial class MeasurementArchive
         if (entry.Measurement.Capture.Sha256 != hash)
             throw new ArgumentException($"{entry.File}: the file changed after it was measured; measure it again", nameof(entry));
         EntryDetails details = entry.Details with { Tags = [.. entry.Details.Tags.Distinct().Order(StringComparer.Ordinal)] };
-        byte[] content = JsonSerializer.SerializeToUtf8Bytes(new EntryContent
+        var content = new EntryContent
         {
             By = entry.By,
             File = System.IO.Path.GetFileName(entry.File),
@@ -55,8 +65,9 @@ public sealed partial class MeasurementArchive
             CapturedAtSource = entry.CapturedAtIsGiven ? "given" : "file",
             Details = details,
             Measurement = ContentMaker.From(entry.Measurement, entry.Context),
-        }, ArchiveJson.Readable.EntryContent);
-        return new PreparedEntry(sha256, entry.Bytes.Length, CapturePacker.Pack(entry.Bytes.Span), content, ContentPacker.Pack(content), entry.Again);
+        };
+        byte[] json = JsonSerializer.SerializeToUtf8Bytes(content, ArchiveJson.Readable.EntryContent);
+        return new PreparedEntry(sha256, entry.Bytes.Length, CapturePacker.Pack(entry.Bytes.Span), content, json, ContentPacker.Pack(json), entry.Again);
     }
 
     private Added Write(PreparedEntry prepared)
@@ -70,25 +81,33 @@ public sealed partial class MeasurementArchive
         {
             _ledger.AddCapture(prepared.Sha256, prepared.Length, prepared.Packed);
         }
-        Entry entry = Append(LedgerRecord.EntryKind, _ledger.LastEntry() + 1, LedgerRecord.Hex(prepared.Sha256), prepared.Content, prepared.PackedContent, null);
+        (LedgerRecord record, string hash) = Append(LedgerRecord.EntryKind, _ledger.LastEntry() + 1, LedgerRecord.Hex(prepared.Sha256), prepared.Json, prepared.PackedJson);
+        Entry entry = EntryFolder.Begin(prepared.Content, record, hash);
+        _tables.Write(entry);
         return new Added(entry.Number, true, entry.AddedAt);
     }
 
     private Added? EntryOf(byte[] sha256)
     {
-        using var row = _database.Rows("SELECT e.number, e.added_at FROM entry e JOIN capture c ON c.id = e.capture WHERE c.sha256 = ?1 ORDER BY e.number LIMIT 1", sha256);
+        using var row = _database.Rows("SELECT e.number, e.added_at FROM entry e JOIN capture c ON c.id = e.capture WHERE c.sha256 = @1 ORDER BY e.number LIMIT 1", sha256);
         return row.Read() ? new Added(row.GetInt32(0), false, LedgerRecord.ParseStamp(row.GetString(1))) : null;
     }
 
-    // Writes the next record and what searches need of it. Inside a write transaction only.
-    private Entry Append(string kind, int number, string capture, byte[] content, byte[] packedContent, Entry? before)
+    // Writes a record that concerns an entry and what searches need of it. Inside a write transaction only.
+    private Entry Append(string kind, Entry before, byte[] json)
     {
-        (long last, string previous) = _ledger.Head();
-        var record = new LedgerRecord(last + 1, kind, number, LedgerRecord.Stamp(_clock.GetUtcNow()), capture, LedgerRecord.HashOf(content));
-        string hash = record.Hash(previous);
-        _ledger.Append(record, hash, packedContent);
-        Entry entry = EntryFolder.Apply(before, record, hash, content);
+        (LedgerRecord record, string hash) = Append(kind, before.Number, "", json, ContentPacker.Pack(json));
+        Entry entry = EntryFolder.Apply(before, record, hash, json);
         _tables.Write(entry);
         return entry;
+    }
+
+    private (LedgerRecord Record, string Hash) Append(string kind, int number, string capture, byte[] json, byte[] packedJson)
+    {
+        (long last, string previous) = _ledger.Head();
+        var record = new LedgerRecord(last + 1, kind, number, LedgerRecord.Stamp(_clock.GetUtcNow()), capture, LedgerRecord.HashOf(json));
+        string hash = record.Hash(previous);
+        _ledger.Append(record, hash, packedJson);
+        return (record, hash);
     }
 }

@@ -30,7 +30,7 @@ public sealed partial class MeasurementArchive
             if (changes.Length == 0)
                 throw new ArchiveException(Path, $"entry {number} says so already; nothing was written");
             byte[] content = JsonSerializer.SerializeToUtf8Bytes(new AmendmentContent(by, reason, changes), ArchiveJson.Readable.AmendmentContent);
-            return Append(LedgerRecord.AmendmentKind, number, "", content, ContentPacker.Pack(content), before);
+            return Append(LedgerRecord.AmendmentKind, before, content);
         }));
     }
 
@@ -53,7 +53,7 @@ public sealed partial class MeasurementArchive
                 throw new ArchiveException(Path, $"the measurement is not of entry {number}'s capture; nothing was written");
             byte[] content = JsonSerializer.SerializeToUtf8Bytes(
                 new RemeasurementContent(by, reason, ContentMaker.From(measurement, context)), ArchiveJson.Readable.RemeasurementContent);
-            return Append(LedgerRecord.MeasurementKind, number, "", content, ContentPacker.Pack(content), before);
+            return Append(LedgerRecord.MeasurementKind, before, content);
         }));
     }
 

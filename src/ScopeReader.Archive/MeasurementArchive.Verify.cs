@@ -105,7 +105,7 @@ public sealed partial class MeasurementArchive
                 Try(where, () =>
                 {
                     where = Name(ids[i]);
-                    using SqliteDataReader row = database.Rows("SELECT sha256, length, packed FROM capture WHERE id = ?1", ids[i]);
+                    using SqliteDataReader row = database.Rows("SELECT sha256, length, packed FROM capture WHERE id = @1", ids[i]);
                     row.Read();
                     byte[] bytes = Packing.CapturePacker.Unpack(row.GetFieldValue<byte[]>(2));
                     if (bytes.Length != row.GetInt64(1) || LedgerRecord.HashOf(bytes) != LedgerRecord.Hex(row.GetFieldValue<byte[]>(0)))
@@ -118,7 +118,7 @@ public sealed partial class MeasurementArchive
         private string Name(long capture)
         {
             var entries = new List<string>();
-            using SqliteDataReader row = database.Rows("SELECT number, file FROM entry WHERE capture = ?1 ORDER BY number", capture);
+            using SqliteDataReader row = database.Rows("SELECT number, file FROM entry WHERE capture = @1 ORDER BY number", capture);
             while (row.Read())
                 entries.Add($"entry {row.GetInt64(0)}, {row.GetString(1)}");
             return entries.Count == 0 ? $"capture {capture} (no entry has it)" : $"capture {capture} ({string.Join("; ", entries)})";

@@ -1,3 +1,5 @@
+using ScopeReader.Archive.Contents;
+
 namespace ScopeReader.Archive;
 
 /// <summary>Entries that are hashed and compressed, ready to be written.</summary>
@@ -8,4 +10,4 @@ public sealed class PreparedEntries
     internal IReadOnlyList<PreparedEntry> Entries { get; }
 }
 
-internal sealed record PreparedEntry(byte[] Sha256, long Length, byte[] Packed, byte[] Content, byte[] PackedContent, bool Again);
+internal sealed record PreparedEntry(byte[] Sha256, long Length, byte[] Packed, EntryContent Content, byte[] Json, byte[] PackedJson, bool Again);

@@ -38,7 +38,7 @@ public sealed class FaultTests : IDisposable
     {
         _fixture.Filled();
         Run("PRAGMA user_version = 99");
-        Assert.Equal($"{_fixture.File}: made by a newer version of this program (schema 99; this one knows 1); nothing was written; use the newer version",
+        Assert.Equal($"{_fixture.File}: made by a newer version of this program (schema 99; this one knows 2); nothing was written; use the newer version",
             Assert.Throws<ArchiveException>(_fixture.Open).Message);
         Assert.Throws<ArchiveException>(() => MeasurementArchive.OpenToRead(_fixture.File));
     }

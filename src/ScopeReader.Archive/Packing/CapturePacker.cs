@@ -14,6 +14,10 @@ public static class CapturePacker
     private const byte Version = 1, Plain = 0, Table = 1;
     private const int BlockLength = 4 << 20;
 
+    // Room for a block's text, one a thread: made anew for every capture it would be what the collector of garbage lives on.
+    [ThreadStatic]
+    private static PackWriter? _again;
+
     /// <summary>Packs bytes.</summary>
     /// <param name="bytes">Any bytes.</param>
     public static byte[] Pack(ReadOnlySpan<byte> bytes)
@@ -87,7 +91,8 @@ public static class CapturePacker
     private static bool ComesBack(byte[] table, ReadOnlySpan<byte> block)
     {
         Decompressor decompressor = Zstandard.Decompressor;
-        var again = new PackWriter(block.Length);
+        PackWriter again = _again ??= new PackWriter(block.Length);
+        again.Clear();
         TableCoder.Decode(table, again, decompressor);
         return again.Written.SequenceEqual(block);
     }

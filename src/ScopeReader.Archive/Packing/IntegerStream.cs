@@ -6,7 +6,7 @@ namespace ScopeReader.Archive.Packing;
 /// <summary>A run of whole numbers as differences of the order that leaves least, split into bytes, each byte's run compressed.</summary>
 internal static class IntegerStream
 {
-    private const int HighestOrder = 2, SampleLength = 16384, Buckets = 4096;
+    private const int HighestOrder = 2, SampleLength = 4096, Buckets = 4096;
     private const byte Zeros = 0, Compressed = 1;
 
     /// <summary>Writes the numbers; all arithmetic wraps at <paramref name="bits"/>.</summary>
@@ -95,6 +95,8 @@ internal static class IntegerStream
     // The order whose differences have the least entropy, judged on the start of the run.
     private static int BestOrder(ReadOnlySpan<long> values, int bits)
     {
+        if (!values.IsEmpty && !values.ContainsAnyExcept(values[0]))
+            return 1;
         long[] sample = values[..Math.Min(values.Length, SampleLength)].ToArray();
         int best = 0;
         double least = double.PositiveInfinity;

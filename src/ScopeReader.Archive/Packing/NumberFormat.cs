@@ -24,6 +24,9 @@ internal sealed record NumberFormat(byte[] Before, byte[] After, byte Sign, byte
 
     private static readonly long[] PowersOfTen = MakePowers();
 
+    private static ReadOnlySpan<byte> Pairs =>
+        "00010203040506070809101112131415161718192021222324252627282930313233343536373839404142434445464748495051525354555657585960616263646566676869707172737475767778798081828384858687888990919293949596979899"u8;
+
     /// <summary>Reads a field as a scaled whole number; the caller writes it again and compares.</summary>
     public bool TryRead(ReadOnlySpan<byte> field, out long mantissa, out sbyte exponent)
     {
@@ -64,8 +67,11 @@ internal sealed record NumberFormat(byte[] Before, byte[] After, byte Sign, byte
         if (Decimals > 0 && !(Trims && fraction == 0))
         {
             text[at++] = Point;
-            for (int i = at + Decimals - 1; i >= at; i--, fraction /= 10)
-                text[i] = (byte)('0' + fraction % 10);
+            int i = at + Decimals;
+            for (; i - at >= 2; fraction /= 100)
+                Pairs.Slice(2 * (int)(fraction % 100), 2).CopyTo(text[(i -= 2)..]);
+            if (i > at)
+                text[at] = (byte)('0' + fraction);
             at += Decimals;
             while (Trims && text[at - 1] == '0')
                 at--;

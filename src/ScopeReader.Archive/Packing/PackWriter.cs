@@ -39,6 +39,9 @@ internal sealed class PackWriter(int capacity = 256)
         return room;
     }
 
+    /// <summary>Forgets what was written and keeps the room.</summary>
+    public void Clear() => Length = 0;
+
     /// <summary>Gives back the last bytes of <see cref="Room"/> that were not needed.</summary>
     public void GiveBack(int count) => Length -= count;
 

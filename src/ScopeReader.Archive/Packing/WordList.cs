@@ -1,5 +1,4 @@
 using System.Buffers.Text;
-using System.Runtime.InteropServices;
 
 namespace ScopeReader.Archive.Packing;
 
@@ -7,7 +6,7 @@ namespace ScopeReader.Archive.Packing;
 internal sealed class WordList
 {
     // What a row may cost: more different texts than this and the list outweighs what it saves.
-    private const int RowsPerWord = 4, MostWords = 1 << 16, LongestWord = 32;
+    private const int RowsPerWord = 4, EnoughToSee = 512, MostWords = 1 << 16;
 
     private WordList(byte[] text, int count, long[] indices) => (Text, Count, Indices) = (text, count, indices);
 
@@ -28,25 +27,21 @@ internal sealed class WordList
     public static WordList? TryMake(ReadOnlySpan<byte> block, TextTable table, int column)
     {
         int allowed = Math.Min(MostWords, 16 + table.Rows / RowsPerWord);
-        var numbers = new Dictionary<WordKey, int>();
-        var words = new List<byte[]>();
+        var found = new WordTable(allowed);
         var indices = new long[table.Rows];
         for (int row = 0; row < table.Rows; row++)
         {
             ReadOnlySpan<byte> field = block[table.Field(row, column)];
-            if (field.Length >= LongestWord)
+            if (field.Length > WordTable.LongestWord)
                 return null;
-            ref int number = ref CollectionsMarshal.GetValueRefOrAddDefault(numbers, Key(field), out bool known);
-            if (!known)
-            {
-                if (words.Count == allowed)
-                    return null;
-                number = words.Count;
-                words.Add(field.ToArray());
-            }
+            int number = found.NumberOf(field);
+            // Times differ from row to row: that is seen long before the list is full.
+            if (number < 0 || (row == EnoughToSee && number == EnoughToSee))
+                return null;
             indices[row] = number;
         }
 
+        IReadOnlyList<byte[]> words = found.Words;
         // By value, so that neighbours in voltage are neighbours in number, as the converter had them.
         int[] order = [.. Enumerable.Range(0, words.Count).OrderBy(i => ValueOf(words[i])).ThenBy(i => i)];
         var place = new int[order.Length];
@@ -61,18 +56,6 @@ internal sealed class WordList
             indices[row] = place[indices[row]];
         return new WordList(text.ToArray(), words.Count, indices);
     }
-
-    // Up to 31 bytes and their number: no two fields share a key.
-    private static WordKey Key(ReadOnlySpan<byte> field)
-    {
-        Span<byte> key = stackalloc byte[LongestWord];
-        key.Clear();
-        field.CopyTo(key);
-        key[^1] = (byte)field.Length;
-        return MemoryMarshal.Read<WordKey>(key);
-    }
-
-    private readonly record struct WordKey(UInt128 Start, UInt128 End);
 
     private static double ValueOf(ReadOnlySpan<byte> word) =>
         Utf8Parser.TryParse(word.TrimStart((byte)' '), out double value, out _) ? value : double.NegativeInfinity;

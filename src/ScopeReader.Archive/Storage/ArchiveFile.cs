@@ -10,7 +10,16 @@ internal static class ArchiveFile
     /// <summary>"ScRd" as a number: what marks the file as an archive of this program.</summary>
     public const int ApplicationId = 0x53635264;
 
-    private static readonly string[] Migrations = ["001-initial.sql"];
+    private const int Busy = 5, Locked = 6, ReadOnly = 8, CannotOpen = 14;
+
+    // Pages kept in memory, KiB: an index that a hundred entries write all over fits.
+    private const int CacheSize = 64 * 1024;
+
+    // Pages that the log may grow to, 40 MB, before they go into the archive: pages that every batch changes go there once for
+    // many batches. What is in the log is on the disk like the rest.
+    private const int LogPages = 10_000;
+
+    private static readonly string[] Migrations = ["001-initial.sql", "002-reading-units.sql"];
 
     /// <summary>The schema's version that this program writes.</summary>
     public static int SchemaVersion => Migrations.Length;
@@ -24,6 +33,8 @@ internal static class ArchiveFile
             Check(database, path, allowEmpty: true);
             UseWriteAheadLog(database, patience);
             database.Run("PRAGMA synchronous = FULL");
+            database.Run(string.Create(CultureInfo.InvariantCulture, $"PRAGMA cache_size = -{CacheSize}"));
+            database.Value(string.Create(CultureInfo.InvariantCulture, $"PRAGMA wal_autocheckpoint = {LogPages}"));
             Migrate(database, path);
             return database;
         }
@@ -37,6 +48,26 @@ internal static class ArchiveFile
     /// <summary>Opens to read; works in a read-only folder too where no unfinished log lies beside the file.</summary>
     public static Database OpenToRead(string path, TimeSpan patience)
     {
+        Database database = OpenReadOnly(path, patience);
+        long version = database.Number("PRAGMA user_version");
+        if (version == SchemaVersion)
+            return database;
+        database.Dispose();
+        try
+        {
+            // Its search tables get what is new; its records stay as they are.
+            OpenToWrite(path, patience).Dispose();
+        }
+        catch (SqliteException fault) when (fault.SqliteErrorCode is ReadOnly or CannotOpen)
+        {
+            throw new ArchiveException(path, string.Create(CultureInfo.InvariantCulture,
+                $"made by an older version of this program (schema {version} of {SchemaVersion}) and cannot be brought up to date here; copy it to where it can be written"), fault);
+        }
+        return OpenReadOnly(path, patience);
+    }
+
+    private static Database OpenReadOnly(string path, TimeSpan patience)
+    {
         Database? database = null;
         try
         {
@@ -44,7 +75,7 @@ internal static class ArchiveFile
             Check(database, path, allowEmpty: false);
             return database;
         }
-        catch (SqliteException fault) when (fault.SqliteErrorCode is 14 or 8 && LogIsEmpty(path))
+        catch (SqliteException fault) when (fault.SqliteErrorCode is CannotOpen or ReadOnly && LogIsEmpty(path))
         {
             database?.Dispose();
             // Reading a file with a write-ahead log needs a shared-memory file beside it. In a folder that cannot take one
@@ -87,9 +118,6 @@ internal static class ArchiveFile
         if (version > SchemaVersion)
             throw new ArchiveException(path, string.Create(CultureInfo.InvariantCulture,
                 $"made by a newer version of this program (schema {version}; this one knows {SchemaVersion}); nothing was written; use the newer version"));
-        if (version < SchemaVersion && !allowEmpty)
-            throw new ArchiveException(path, string.Create(CultureInfo.InvariantCulture,
-                $"made by an older version of this program (schema {version} of {SchemaVersion}); open it once where it can be written, for instance with archive stats"));
     }
 
     // Changing the journal's kind does not wait for other openers by itself.
@@ -104,7 +132,7 @@ internal static class ArchiveFile
                     database.Value("PRAGMA journal_mode = WAL");
                 return;
             }
-            catch (SqliteException fault) when (fault.SqliteErrorCode is 5 or 6 && watch.Elapsed < patience)
+            catch (SqliteException fault) when (fault.SqliteErrorCode is Busy or Locked && watch.Elapsed < patience)
             {
                 Thread.Sleep(5);
             }

@@ -20,7 +20,7 @@ internal sealed class Database : IDisposable
     public SqliteConnection Connection { get; }
 
     /// <summary>Runs a statement.</summary>
-    /// <param name="sql">A text of this program's own; its parameters are ?1, ?2, ….</param>
+    /// <param name="sql">A text of this program's own; its parameters are @1, @2, ….</param>
     /// <param name="values">The parameters' values in order; null for NULL.</param>
     /// <returns>Rows changed.</returns>
     public int Run(string sql, params ReadOnlySpan<object?> values) => Prepare(sql, values).ExecuteNonQuery();
@@ -35,6 +35,13 @@ internal sealed class Database : IDisposable
         if (_prepared.Count > MostPrepared)
             _prepared.Remove(sql);
         return rows;
+    }
+
+    /// <summary>The first column of the first row of such a query.</summary>
+    public long NumberOnce(string sql, params ReadOnlySpan<object?> values)
+    {
+        using SqliteDataReader rows = RowsOnce(sql, values);
+        return rows.Read() && !rows.IsDBNull(0) ? rows.GetInt64(0) : 0;
     }
 
     /// <summary>The first column of the first row, or null.</summary>
@@ -63,10 +70,10 @@ internal sealed class Database : IDisposable
 #pragma warning disable CA2100 // Every caller passes a text of this program's own.
             command.CommandText = sql;
 #pragma warning restore CA2100
-            for (int i = 1; i <= values.Length; i++)
-                command.Parameters.Add(new SqliteParameter { ParameterName = string.Create(CultureInfo.InvariantCulture, $"?{i}") });
             _prepared.Add(sql, command);
         }
+        for (int i = command.Parameters.Count + 1; i <= values.Length; i++)
+            command.Parameters.Add(new SqliteParameter { ParameterName = string.Create(CultureInfo.InvariantCulture, $"@{i}") });
         for (int i = 0; i < values.Length; i++)
             command.Parameters[i].Value = values[i] ?? DBNull.Value;
         return command;

@@ -27,8 +27,7 @@ internal static class EntryFolder
             switch (record.Kind)
             {
                 case LedgerRecord.EntryKind:
-                    EntryContent first = JsonSerializer.Deserialize(content, ArchiveJson.Readable.EntryContent)!;
-                    return Begin(first, record, at, hash);
+                    return Begin(JsonSerializer.Deserialize(content, ArchiveJson.Readable.EntryContent)!, record, hash);
                 case LedgerRecord.AmendmentKind:
                     AmendmentContent amendment = JsonSerializer.Deserialize(content, ArchiveJson.Readable.AmendmentContent)!;
                     return Amended(Existing(entry, record), amendment.Changes) with
@@ -52,7 +51,8 @@ internal static class EntryFolder
         }
     }
 
-    private static Entry Begin(EntryContent content, LedgerRecord record, DateTimeOffset at, string hash) => new()
+    /// <summary>The entry after its first record.</summary>
+    public static Entry Begin(EntryContent content, LedgerRecord record, string hash) => new()
     {
         Number = record.Entry,
         File = content.File,
@@ -60,10 +60,10 @@ internal static class EntryFolder
         Bytes = content.Bytes,
         CapturedAt = content.CapturedAt,
         CapturedAtSource = content.CapturedAtSource,
-        AddedAt = at,
+        AddedAt = LedgerRecord.ParseStamp(record.At),
         Details = content.Details,
         Measurement = content.Measurement,
-        History = [new EntryEvent(record.Number, record.Kind, at, content.By, "", hash, [], content.Measurement)],
+        History = [new EntryEvent(record.Number, record.Kind, LedgerRecord.ParseStamp(record.At), content.By, "", hash, [], content.Measurement)],
     };
 
     private static Entry Existing(Entry? entry, LedgerRecord record) =>

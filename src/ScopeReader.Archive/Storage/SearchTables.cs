@@ -14,22 +14,22 @@ internal sealed class SearchTables(Database database)
         [Main] = (
             """
             INSERT INTO entry (number, capture, file, subject, serial, operator, instrument, captured_at, added_at, outcome)
-            VALUES (?1, (SELECT id FROM capture WHERE sha256 = ?2), ?3, ?4, ?5, ?6, ?7, ?8, ?9, ?10)
+            VALUES (@1, (SELECT id FROM capture WHERE sha256 = @2), @3, @4, @5, @6, @7, @8, @9, @10)
             ON CONFLICT (number) DO UPDATE SET subject = excluded.subject, serial = excluded.serial, operator = excluded.operator,
                 instrument = excluded.instrument, captured_at = excluded.captured_at, outcome = excluded.outcome
             """,
-            "SELECT e.number, c.sha256, e.file, e.subject, e.serial, e.operator, e.instrument, e.captured_at, e.added_at, e.outcome FROM entry e JOIN capture c ON c.id = e.capture WHERE e.number = ?1"),
-        [Tag] = ("INSERT INTO tag (entry, tag) VALUES (?1, ?2)", "SELECT entry, tag FROM tag WHERE entry = ?1"),
-        [Condition] = ("INSERT INTO condition (entry, name, value, unit) VALUES (?1, ?2, ?3, ?4)", "SELECT entry, name, value, unit FROM condition WHERE entry = ?1"),
+            "SELECT e.number, c.sha256, e.file, e.subject, e.serial, e.operator, e.instrument, e.captured_at, e.added_at, e.outcome FROM entry e JOIN capture c ON c.id = e.capture WHERE e.number = @1"),
+        [Tag] = ("INSERT INTO tag (entry, tag) VALUES (@1, @2)", "SELECT entry, tag FROM tag WHERE entry = @1"),
+        [Condition] = ("INSERT INTO condition (entry, name, value, unit) VALUES (@1, @2, @3, @4)", "SELECT entry, name, value, unit FROM condition WHERE entry = @1"),
         [Reading] = (
             """
             INSERT INTO reading (entry, quantity, channel, segment, value, unit, expanded, repeatability, method)
-            VALUES (?1, (SELECT id FROM quantity WHERE name = ?2), ?3, ?4, ?5, ?6, ?7, ?8, ?9)
+            VALUES (@1, (SELECT id FROM quantity WHERE name = @2), @3, @4, @5, @6, @7, @8, @9)
             """,
-            "SELECT r.entry, q.name, r.channel, r.segment, r.value, r.unit, r.expanded, r.repeatability, r.method FROM reading r JOIN quantity q ON q.id = r.quantity WHERE r.entry = ?1"),
+            "SELECT r.entry, q.name, r.channel, r.segment, r.value, r.unit, r.expanded, r.repeatability, r.method FROM reading r JOIN quantity q ON q.id = r.quantity WHERE r.entry = @1"),
         [Text] = (
-            "INSERT INTO entry_text (rowid, subject, serial, operator, instrument, notes, tags, file, findings) VALUES (?1, ?2, ?3, ?4, ?5, ?6, ?7, ?8, ?9)",
-            "SELECT rowid, subject, serial, operator, instrument, notes, tags, file, findings FROM entry_text WHERE rowid = ?1"),
+            "INSERT INTO entry_text (rowid, subject, serial, operator, instrument, notes, tags, file, findings) VALUES (@1, @2, @3, @4, @5, @6, @7, @8, @9)",
+            "SELECT rowid, subject, serial, operator, instrument, notes, tags, file, findings FROM entry_text WHERE rowid = @1"),
     };
 
     private readonly HashSet<string> _quantities = new(StringComparer.Ordinal);
@@ -42,7 +42,7 @@ internal sealed class SearchTables(Database database)
         foreach ((string table, object?[] values) in RowsOf(entry))
         {
             if (table == Reading && _quantities.Add((string)values[1]!))
-                database.Run("INSERT OR IGNORE INTO quantity (name) VALUES (?1)", values[1]);
+                database.Run("INSERT OR IGNORE INTO quantity (name) VALUES (@1)", values[1]);
             database.Run(Statements[table].Insert, values);
         }
     }
@@ -70,10 +70,10 @@ internal sealed class SearchTables(Database database)
 
     private void Erase(int entry)
     {
-        database.Run("DELETE FROM tag WHERE entry = ?1", entry);
-        database.Run("DELETE FROM condition WHERE entry = ?1", entry);
-        database.Run("DELETE FROM reading WHERE entry = ?1", entry);
-        database.Run("DELETE FROM entry_text WHERE rowid = ?1", entry);
+        database.Run("DELETE FROM tag WHERE entry = @1", entry);
+        database.Run("DELETE FROM condition WHERE entry = @1", entry);
+        database.Run("DELETE FROM reading WHERE entry = @1", entry);
+        database.Run("DELETE FROM entry_text WHERE rowid = @1", entry);
     }
 
     private static IEnumerable<(string Table, object?[] Values)> RowsOf(Entry entry)

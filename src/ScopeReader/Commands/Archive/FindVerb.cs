@@ -29,7 +29,7 @@ internal static class FindVerb
             return ArchiveCommand.Run(surroundings, () =>
             {
                 using MeasurementArchive opened = MeasurementArchive.OpenToRead(ArchiveCommand.PathOf(parsed, archive));
-                Found found = opened.Find(query);
+                Found found = opened.Find(parsed.GetValue(json) ? query : query with { Quantities = QuantitiesOf(query) });
                 foreach (string doubt in found.Doubts)
                     surroundings.Error.WriteLine(SafeText.Of(doubt));
                 if (parsed.GetValue(json))
@@ -44,6 +44,9 @@ internal static class FindVerb
         return command;
     }
 
+    // A table shows the readings that were asked about.
+    private static string[] QuantitiesOf(ArchiveQuery query) => [.. query.Where.Where(w => w.IsQuantity).Select(w => w.Name).Distinct()];
+
     private static void Csv(Found found, TextWriter output)
     {
         var table = new SpreadsheetCsv(output);
@@ -56,7 +59,7 @@ internal static class FindVerb
     private static void Table(Found found, ArchiveQuery query, Surroundings to)
     {
         var sheet = new Sheet(to.Width(), to.Colour);
-        string[] quantities = [.. query.Where.Where(w => w.IsQuantity).Select(w => w.Name).Distinct()];
+        string[] quantities = QuantitiesOf(query);
         if (found.Entries.Count > 0)
             sheet.Columns([["entry", "captured", "outcome", .. quantities, "subject, file"], .. found.Entries.Select(e => Row(e, quantities))]);
         sheet.Line(found.Matches > found.Entries.Count
