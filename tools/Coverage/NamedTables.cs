@@ -12,5 +12,6 @@ internal static class NamedTables
     public static IReadOnlyList<NamedTable> All { get; } =
     [
         new("dbc", "harmonics, distortion, noise and spurs of made sources", DbcTable.Write),
+        new("trace", "spectrum traces: levels, powers, noise density, occupied bandwidth", TraceTable.Write),
     ];
 }

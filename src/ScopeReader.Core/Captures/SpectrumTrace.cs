@@ -36,6 +36,9 @@ public sealed class SpectrumTrace : Channel
     /// <summary>-3 dB width of the resolution filter, Hz; null where unknown.</summary>
     public double? ResolutionBandwidth { get; }
 
+    /// <summary>What the trace averages, where the file states it.</summary>
+    public TraceAveraging Averaging { get; init; }
+
     /// <summary>Where the frequency axis was found.</summary>
     public AxisSource Source { get; }
 

@@ -43,14 +43,27 @@ public sealed record Comparison(ComparedSide Reference, IReadOnlyList<ComparedSi
                 IReadOnlyList<EdgeOverlay> edges = EdgeOverlay.Of(pair);
                 findings.AddRange(ComparisonFindings.Of(pair, here, edges, sides.Count > 1));
                 overlays.AddRange(edges.Select(e => e.Overlay));
+                findings.AddRange(LineComparison.Findings(pair.Reference[0], pair.Compared[0], here));
                 if (SpectrumOverlay.Of(pair) is { } spectrum)
                     overlays.Add(spectrum);
             }
+            alone = [.. alone.Where(channel => !AddLines(channel, reference, side, differences, findings))];
             foreach (Channel channel in alone)
                 findings.Add(new Finding("channel-alone", $"{channel.Name} of {reference.Name} has no counterpart of its name and kind in {side.Name}"));
         }
         findings.Add(ComparisonFindings.Scope(reference, sides, isSameChain));
         return new Comparison(reference, sides, differences, oneSided, findings, [], [], overlays);
+    }
+
+    // A waveform and a spectrum trace have no quantity by one name but their lines: these are compared where each side has one channel.
+    private static bool AddLines(Channel channel, ComparedSide reference, ComparedSide side, List<Difference> differences, List<Finding> findings)
+    {
+        if (side.Captures[0].Channels is not [var compared] || reference.Captures[0].Channels is not [var here] || here.Channel != channel)
+            return false;
+        IReadOnlyList<Difference> lines = LineComparison.Across(here, compared, side.Name);
+        differences.AddRange(lines);
+        findings.AddRange(LineComparison.Findings(here, compared, lines));
+        return lines.Count > 0;
     }
 
     private static List<Difference> Compare(ChannelPair pair, bool isSameChain)

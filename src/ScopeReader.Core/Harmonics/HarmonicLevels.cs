@@ -23,6 +23,7 @@ internal sealed class HarmonicLevels
     {
         (_fit, _noise, _count, FrequencyUncertainty) = (fit, noise, samples.Length, frequencyUncertainty);
         Rest = new NoiseLines(noise);
+        Floor = NoiseFloor.Of(residual, fit.Model.Frequency, fit.Model.Harmonics, Rest);
         double variance = 0;
         foreach (double v in residual)
             variance += v * v / residual.Length;
@@ -51,6 +52,9 @@ internal sealed class HarmonicLevels
 
     /// <summary>Noise and lines beside the harmonics.</summary>
     public NoiseLines Rest { get; }
+
+    /// <summary>The noise between all lines.</summary>
+    public NoiseFloor Floor { get; }
 
     /// <summary>Mean square of what the fit leaves over the whole record.</summary>
     public double RestVariance => _fit.RestSquares / Math.Max(1, _count - _fit.Unknowns);

@@ -90,7 +90,7 @@ internal sealed class NoiseReport(HarmonicLines lines)
 
     private void WriteFloor()
     {
-        NoiseLines noise = _levels.Rest;
+        NoiseFloor noise = _levels.Floor;
         if (!_job.Waveform.Axis.IsTimed)
         {
             _job.Sheet.Refuse("no-interval", "the file states no sample interval, and a density needs one; give it with --interval or --rate", Quantities.NoiseFloor);

@@ -138,6 +138,13 @@ internal sealed class TraceLevels
         yield return BudgetTerm.Rectangular("level-resolution", _step / 2);
     }
 
+    /// <summary>Levels of the points, dB.</summary>
+    public ReadOnlySpan<double> Levels => _levels;
+
+    /// <summary>Noise of the whole trace, lines left out.</summary>
+    /// <param name="from">Index after the start-of-span feed-through.</param>
+    public TraceNoise Floor(int from) => TraceNoise.Of(_levels[Math.Min(from, _levels.Length - 3)..]);
+
     /// <summary>The line whose highest point is known; null where too few points lie on it.</summary>
     public TraceLine? Line(int top)
     {

@@ -18,19 +18,22 @@ internal sealed class TraceReport(SpectrumTrace trace, Plan plan, ReadingSheet s
     {
         if (TraceLevels.Of(trace) is not { } levels)
         {
-            string unit = trace.Unit.Length == 0 ? "no unit" : "the unit " + trace.Unit;
-            RefuseAll("unit", $"the trace has {unit}; expected dBm, dBV, dBµV, V or W: name it with units in [import]");
+            string unit = trace.Unit.Length == 0 ? "no unit" : "the unit " + trace.Unit, expected = $"the trace has {unit}; expected dBm, dBV, dBµV, V or W: name it with units in [import]";
+            RefuseAll("unit", expected);
+            sheet.Refuse("unit", expected, Quantities.OccupiedBandwidth, Quantities.ChannelPower, Quantities.NoiseDensity);
             return;
         }
         int from = levels.AfterFeedThrough(), top = levels.Highest(Math.Min(from, levels.Count - 2), levels.Count - 2);
         if (levels.Level(top) < levels.Noise(top).Threshold(levels.Count))
         {
             RefuseAll("no-line", "no line stands out of the noise; narrow the resolution bandwidth, or raise the level");
+            new TracePowerReport(levels, trace, plan, sheet).Write(from);
             return;
         }
         if (levels.Line(top) is not { } peak)
         {
             RefuseAll("unresolved", Text($"fewer than 3 points lie on the line at {Engineering.Format(levels.Frequency(top), "Hz")}; narrow the span, or take more points"));
+            new TracePowerReport(levels, trace, plan, sheet).Write(from);
             return;
         }
         WritePeak(levels, peak);
@@ -39,6 +42,8 @@ internal sealed class TraceReport(SpectrumTrace trace, Plan plan, ReadingSheet s
         if (order > 1 && FindNear(levels, peak.Frequency / order) is not { } _)
             order = 1;
         double fundamental = peak.Frequency / order;
+        new TraceWidthReport(levels, trace.ResolutionBandwidth, _chain, sheet).Write(top, peak);
+        new TracePowerReport(levels, trace, plan, sheet).Write(from);
         WriteError(peak, order, levels.Spacing);
         TraceLine? first = order == 1 ? peak : levels.Line(FindNear(levels, fundamental)!.Value);
         if (first is null)
@@ -46,6 +51,7 @@ internal sealed class TraceReport(SpectrumTrace trace, Plan plan, ReadingSheet s
         else
             WriteHarmonics(levels, first, fundamental, from);
         WriteSubharmonic(levels, peak, order);
+        TraceCombFindings.Write(levels, from, fundamental, peak, Window, sheet);
     }
 
     private double Window => Math.Max(trace.ResolutionBandwidth ?? 0, 0);
@@ -86,8 +92,13 @@ internal sealed class TraceReport(SpectrumTrace trace, Plan plan, ReadingSheet s
         double frequency = peak.Frequency * _chain.FrequencyFactor;
         Add(Quantities.PeakFrequency, frequency, "Hz", _chain.ForTime(frequency, peak.FrequencyTerms));
         bool power = levels.Unit == "dBm";
-        Add(power ? Quantities.PeakPower : Quantities.PeakLevel, peak.LevelDb, levels.Unit, _chain.ForAbsoluteDecibels(peak.LevelTerms));
-        sheet.Refuse("unit", Text($"the trace is in {trace.Unit}; {(power ? "peak-power" : "peak-level")} has its level"), power ? Quantities.PeakLevel : Quantities.PeakPower);
+        (Quantity own, Quantity other) = power ? (Quantities.PeakPower, Quantities.PeakLevel) : (Quantities.PeakLevel, Quantities.PeakPower);
+        Budget budget = _chain.ForAbsoluteDecibels(peak.LevelTerms);
+        sheet.Add(new Reading(own, peak.LevelDb, levels.Unit, budget, Method) { Note = trace.Unit == levels.Unit ? null : $"the file has {trace.Unit}" });
+        if (plan.Chain.Impedance is { } ohms)
+            sheet.Add(new Reading(other, power ? peak.LevelDb - Decibels.DbmOfDbv(0, ohms) : Decibels.DbmOfDbv(peak.LevelDb, ohms), other.Unit, budget, Method) { Note = $"in {Engineering.Given(ohms, "ohm", 5)}" });
+        else
+            sheet.Refuse("no-impedance", Text($"the trace is in {trace.Unit}: {own.Id} has its level; add impedance to [chain] for this one"), other);
     }
 
     private void WriteError(TraceLine peak, int order, double spacing)
@@ -163,6 +174,7 @@ internal sealed class TraceReport(SpectrumTrace trace, Plan plan, ReadingSheet s
     private void RefuseAll(string code, string reason)
     {
         sheet.Refuse(code, reason, Quantities.PeakFrequency, Quantities.PeakPower, Quantities.PeakLevel, Quantities.FrequencyError);
+        sheet.Refuse(code, reason, Quantities.Bandwidth3Db, Quantities.Bandwidth6Db, Quantities.Bandwidth60Db);
         RefuseHarmonics(code, reason);
     }
 

@@ -152,6 +152,26 @@ public static class Quantities
     /// <summary>Level of the strongest line.</summary>
     public static Quantity PeakLevel { get; } = new("peak-level", "dBV", "level of the strongest line of a spectrum trace in volts", "parabola through three levels in dB", Spectrum);
 
+    private const string FirstCrossings = "first crossings on both sides, as seen beside the resolution filter";
+
+    /// <summary>Width of the strongest line 3 dB down.</summary>
+    public static Quantity Bandwidth3Db { get; } = new("bandwidth-3db", "Hz", "width of the strongest line where it has half of its power", FirstCrossings, Spectrum);
+
+    /// <summary>Width of the strongest line 6 dB down.</summary>
+    public static Quantity Bandwidth6Db { get; } = new("bandwidth-6db", "Hz", "width of the strongest line where it has a quarter of its power", FirstCrossings, Spectrum);
+
+    /// <summary>Width of the strongest line 60 dB down.</summary>
+    public static Quantity Bandwidth60Db { get; } = new("bandwidth-60db", "Hz", "width of the strongest line 60 dB below its top", FirstCrossings, Spectrum);
+
+    /// <summary>Band of 99 % of the power.</summary>
+    public static Quantity OccupiedBandwidth { get; } = new("occupied-bandwidth", "Hz", "band that holds 99 % of the power of the trace, half a percent outside on each side", "Radio Regulations, occupied bandwidth", Spectrum);
+
+    /// <summary>Power of the whole trace.</summary>
+    public static Quantity ChannelPower { get; } = new("channel-power", "dBm", "power in the trace's whole span, from its points and the resolution filter's noise bandwidth", Common, Spectrum);
+
+    /// <summary>Noise in 1 Hz.</summary>
+    public static Quantity NoiseDensity { get; } = new("noise-density", "dBm/Hz", "power of the trace's noise in 1 Hz, lines left out", Common, Spectrum);
+
     /// <summary>Margin to a limit line.</summary>
     public static Quantity LimitLineMargin { get; } = new("limit-line-margin", "dB", "least distance of a spectrum trace from a limit line of the plan, positive inside it", Common, Spectrum);
 
@@ -164,7 +184,7 @@ public static class Quantities
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,
         RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude, RingingInductance, RingingCapacitance, DampingResistance,
         FundamentalLevel, FundamentalPower, .. HarmonicTable, WorstHarmonic, Thd, ThdR, Sinad, Enob, Sfdr, NoiseFloor,
-        PeakFrequency, PeakPower, PeakLevel, LimitLineMargin,
+        PeakFrequency, PeakPower, PeakLevel, Bandwidth3Db, Bandwidth6Db, Bandwidth60Db, OccupiedBandwidth, ChannelPower, NoiseDensity, LimitLineMargin,
     ];
 
     private static readonly Dictionary<string, Quantity> ById = All.ToDictionary(q => q.Id, StringComparer.Ordinal);

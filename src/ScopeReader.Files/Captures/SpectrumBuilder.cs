@@ -75,7 +75,7 @@ internal static class SpectrumBuilder
             Raise(capture, table, source, frequencies, isWhole: kept == last, row);
         capture.Scale(levels, source.Unit, source.Factor);
         double? resolution = table.Facts.Number(Fact.ResolutionBandwidth, "Hz") is { Value: > 0 } stated ? stated.Value : null;
-        capture.Add(new SpectrumTrace(source.Name, source.Unit, frequencies, levels, resolution, axis, capture.NextSegment(source.Name)), last - kept);
+        capture.Add(new SpectrumTrace(source.Name, source.Unit, frequencies, levels, resolution, axis, capture.NextSegment(source.Name)) { Averaging = AveragingWords.Of(table.Facts) }, last - kept);
     }
 
     // Frequencies that are printed too coarsely to tell neighbours apart are evenly spaced ones, or no axis at all.

@@ -106,8 +106,11 @@ public class SpectrumAnalysisTests
     {
         // One record of a hundred may show one by the threshold's construction: this seed is not that one.
         ReadingSheet sheet = Measure((Source with { Lines = [], NoiseDbm = -80 }).Take());
-        Assert.All(sheet.NotMeasured, n => Assert.Equal("no-line", n.Code));
-        Assert.Empty(sheet.Readings);
+        Assert.Equal("no-line", sheet.NotMeasured.Single(n => n.Quantity == Quantities.PeakFrequency).Code);
+        Assert.Equal("no-line", sheet.NotMeasured.Single(n => n.Quantity == Quantities.WorstHarmonic).Code);
+        // What noise has, it has without a line: -80 dBm in 5 kHz · 1.0645.
+        Assert.Equal(["channel-power", "noise-density"], sheet.Readings.Select(r => r.Quantity.Id).Order());
+        Assert.Equal(-80 - 10 * Math.Log10(5322.3), Value(sheet, "noise-density"), 0.5);
     }
 
     private static ReadingSheet Measure(SpectrumTrace trace, Plan? plan = null)

@@ -15,4 +15,6 @@ internal enum Fact
     AxisUnit,
     Channel,
     DecimalMark,
+    Detector,
+    Averaging,
 }
