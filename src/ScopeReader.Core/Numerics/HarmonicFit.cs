@@ -91,9 +91,10 @@ public sealed class HarmonicFit
         var sums = new Dirichlet[2 * k + 1];
         for (int i = 0; i <= 2 * k; i++)
             sums[i] = Dirichlet.Of(i * at.Frequency, samples.Length);
+        ToneSums[] tones = frequencyKnown ? ToneSums.OfMultiples(samples, at.Frequency, k) : [];
         for (int i = 1; i <= k; i++)
         {
-            ToneSums tone = ToneSums.Of(samples, i * at.Frequency, timed: !frequencyKnown);
+            ToneSums tone = frequencyKnown ? tones[i - 1] : ToneSums.Of(samples, i * at.Frequency);
             // The mean is taken off here: an offset far above the amplitude would cost digits.
             right[i] = tone.Cosine - mean * sums[i].Cosine;
             right[k + i] = tone.Sine;

@@ -20,9 +20,7 @@ public sealed class RealTransform
         int complex = packed ? length / 2 : length;
         _inner = ComplexTransform.Of(complex);
         (_re, _im) = (new double[complex], new double[complex]);
-        (_cosine, _sine) = packed ? (new double[complex], new double[complex]) : ([], []);
-        for (int k = 0; k < _cosine.Length; k++)
-            (_cosine[k], _sine[k]) = Turn.Of(k, length);
+        (_cosine, _sine) = packed ? TurnTable.Of(length, complex) : ([], []);
     }
 
     /// <summary>Number of samples.</summary>

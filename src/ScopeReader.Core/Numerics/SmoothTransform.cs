@@ -10,10 +10,11 @@ internal sealed class SmoothTransform : ComplexTransform
     public SmoothTransform(int length)
     {
         (_workRe, _workIm) = (new double[length], new double[length]);
+        (double[] cosine, double[] sine) = TurnTable.Of(length, length);
         int rest = length;
         foreach (int radix in (ReadOnlySpan<int>)[4, 5, 3, 2])
             for (; rest % radix == 0; rest /= radix)
-                _stages.Add(new Stage(radix, rest));
+                _stages.Add(new Stage(radix, rest, cosine, sine));
         if (rest != 1)
             throw new ArgumentException($"{length} has a prime factor above 5", nameof(length));
     }
@@ -48,15 +49,17 @@ internal sealed class SmoothTransform : ComplexTransform
         private readonly double[] _twiddleRe, _twiddleIm;
         private readonly int _count;
 
-        public Stage(int radix, int length)
+        // The turn is divided into the whole transform's parts, of which this stage's length takes every so manieth.
+        public Stage(int radix, int length, double[] cosine, double[] sine)
         {
             (Radix, _count) = (radix, length / radix);
             (_twiddleRe, _twiddleIm) = (new double[(radix - 1) * _count], new double[(radix - 1) * _count]);
+            int step = cosine.Length / length;
             for (int leg = 1; leg < radix; leg++)
                 for (int p = 0; p < _count; p++)
                 {
-                    (double c, double s) = Turn.Of((long)p * leg, length);
-                    (_twiddleRe[(leg - 1) * _count + p], _twiddleIm[(leg - 1) * _count + p]) = (c, -s);
+                    int at = p * leg * step;
+                    (_twiddleRe[(leg - 1) * _count + p], _twiddleIm[(leg - 1) * _count + p]) = (cosine[at], -sine[at]);
                 }
         }
 

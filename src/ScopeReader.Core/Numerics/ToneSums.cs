@@ -14,7 +14,7 @@ namespace ScopeReader.Numerics;
 /// </remarks>
 public readonly record struct ToneSums(double Cosine, double Sine, double TimeCosine, double TimeSine)
 {
-    private const int Block = 256;
+    private const int Block = 256, TonesAtOnce = 10;
 
     /// <summary>The sums over a record.</summary>
     /// <param name="samples">Shape [n].</param>
@@ -44,6 +44,38 @@ public readonly record struct ToneSums(double Cosine, double Sine, double TimeCo
                 total.TimeCosine + t * blockCosine + c0 * tc - s0 * ts, !timed ? 0 : total.TimeSine + t * blockSine + s0 * tc + c0 * ts);
         }
         return total;
+    }
+
+    /// <summary>The sums without t of several tones in one pass over the record.</summary>
+    /// <param name="samples">Shape [n].</param>
+    /// <param name="frequency">Cycles per sample of the first tone.</param>
+    /// <param name="tones">How many: the multiples 1, 2, … of the frequency.</param>
+    public static ToneSums[] OfMultiples(ReadOnlySpan<double> samples, double frequency, int tones)
+    {
+        var totals = new ToneSums[tones];
+        // As many at a time as keep their tables in the first cache.
+        for (int from = 0; from < tones; from += TonesAtOnce)
+            Add(samples, frequency, from, totals.AsSpan(from, Math.Min(TonesAtOnce, tones - from)));
+        return totals;
+    }
+
+    private static void Add(ReadOnlySpan<double> samples, double frequency, int from, Span<ToneSums> totals)
+    {
+        double[] cosine = new double[totals.Length * Block], sine = new double[totals.Length * Block];
+        for (int tone = 0; tone < totals.Length; tone++)
+            for (int j = 0; j < Block; j++)
+                (cosine[tone * Block + j], sine[tone * Block + j]) = Turn.Of((from + tone + 1) * frequency, j);
+        double middle = (samples.Length - 1) / 2.0;
+        for (int start = 0; start < samples.Length; start += Block)
+        {
+            ReadOnlySpan<double> block = samples.Slice(start, Math.Min(Block, samples.Length - start));
+            for (int tone = 0; tone < totals.Length; tone++)
+            {
+                double c = Dot(block, cosine.AsSpan(tone * Block, Block)), s = Dot(block, sine.AsSpan(tone * Block, Block));
+                (double c0, double s0) = Turn.Of((from + tone + 1) * frequency, start - middle);
+                totals[tone] = new ToneSums(totals[tone].Cosine + c0 * c - s0 * s, totals[tone].Sine + s0 * c + c0 * s, 0, 0);
+            }
+        }
     }
 
     // Four running sums whatever the processor has, so that the last bits do not depend on it.

@@ -43,11 +43,12 @@ public sealed class Window
     {
         ArgumentOutOfRangeException.ThrowIfLessThan(length, 1);
         var values = new double[length];
+        double[] cosine = TurnTable.Of(length, length).Cosine;
         for (int n = 0; n <= length / 2; n++)
         {
             double value = _coefficients[0];
             for (int j = 1; j < _coefficients.Length; j++)
-                value += (j % 2 == 0 ? _coefficients[j] : -_coefficients[j]) * Turn.Of((long)j * n, length).Cosine;
+                value += (j % 2 == 0 ? _coefficients[j] : -_coefficients[j]) * cosine[(int)((long)j * n % length)];
             values[n] = value;
             if (n > 0)
                 values[length - n] = value;
