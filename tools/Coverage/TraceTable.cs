@@ -1,5 +1,4 @@
 using ScopeReader.Captures;
-using ScopeReader.Readings;
 using ScopeReader.Signals;
 
 namespace ScopeReader.Coverage;

@@ -143,7 +143,7 @@ internal sealed class TraceLevels
 
     /// <summary>Noise of the whole trace, lines left out.</summary>
     /// <param name="from">Index after the start-of-span feed-through.</param>
-    public TraceNoise Floor(int from) => TraceNoise.Of(_levels[Math.Min(from, _levels.Length - 3)..]);
+    public TraceNoise Floor(int from) => TraceNoise.Of(_levels.AsSpan(Math.Min(from, _levels.Length - 3)).ToArray());
 
     /// <summary>The line whose highest point is known; null where too few points lie on it.</summary>
     public TraceLine? Line(int top)

@@ -28,6 +28,16 @@ public sealed class Window
     /// <summary>HFT90D flat-top: for levels read off the largest bin (Heinzel 2002, sidelobes -90.2 dB).</summary>
     public static Window FlatTop { get; } = new("HFT90D", 1, 1.942604, 1.340318, 0.440811, 0.043097);
 
+    /// <summary>Any window of cosines.</summary>
+    /// <param name="name">Its name.</param>
+    /// <param name="coefficients">a_0, a_1, …, each above 0: the signs alternate by themselves.</param>
+    public static Window OfCosines(string name, params ReadOnlySpan<double> coefficients)
+    {
+        ArgumentException.ThrowIfNullOrEmpty(name);
+        ArgumentOutOfRangeException.ThrowIfZero(coefficients.Length);
+        return new Window(name, coefficients.ToArray());
+    }
+
     /// <summary>The window's name.</summary>
     public string Name { get; }
 

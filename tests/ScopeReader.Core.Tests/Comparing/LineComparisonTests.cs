@@ -1,6 +1,5 @@
 using ScopeReader.Captures;
 using ScopeReader.Comparing;
-using ScopeReader.Readings;
 using ScopeReader.Signals;
 
 namespace ScopeReader.Tests.Comparing;
