@@ -25,7 +25,7 @@ public sealed partial class MeasurementArchive
                     numbers.Add(row.GetInt32(0));
                     matches = row.GetInt64(1);
                 }
-            return new Found(matches, Summaries(numbers, query.Quantities), Doubts(query));
+            return new Found(matches, Summaries(numbers, query.Quantities), UnknownNames(query));
         }));
     }
 
@@ -76,9 +76,6 @@ public sealed partial class MeasurementArchive
     private static string JsonList(IEnumerable<string> items) => $"[{string.Join(',', items)}]";
 
     // A name that nothing has finds nothing, which looks like an answer.
-    private List<string> Doubts(ArchiveQuery query) =>
-    [
-        .. query.Where.Where(w => !w.IsQuantity && _database.Value("SELECT 1 FROM condition WHERE name = @1", w.Name) is null)
-            .Select(w => $"\"{w.Name}\" is neither a quantity nor a condition of any entry"),
-    ];
+    private List<string> UnknownNames(ArchiveQuery query) =>
+        [.. query.Where.Where(w => !w.IsQuantity && _database.Value("SELECT 1 FROM condition WHERE name = @1", w.Name) is null).Select(w => w.Name)];
 }

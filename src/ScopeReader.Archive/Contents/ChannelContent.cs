@@ -18,7 +18,7 @@ public sealed record ChannelContent
     /// <summary>How many samples or points.</summary>
     public required int Samples { get; init; }
 
-    /// <summary>Sample interval, s; null where none is known and for a spectrum trace.</summary>
+    /// <summary>Sample interval, s, or distance of a spectrum trace's points, Hz; null where none is known or they are uneven.</summary>
     public double? Interval { get; init; }
 
     /// <summary>Shortest interval that the file allows, s.</summary>

@@ -19,7 +19,7 @@ public static class ContentMaker
             Settings = context.Settings,
             Chain = context.Chain,
             Import = context.Import,
-            Outcome = measurement.Outcome.ToString().ToLowerInvariant(),
+            Outcome = OutputWords.Of(measurement.Outcome),
             Cautions = measurement.Cautions,
             Doubts = measurement.Capture.Doubts,
             Channels = [.. measurement.Channels.Select(From)],
@@ -31,13 +31,13 @@ public static class ContentMaker
         var content = new ChannelContent
         {
             Name = found.Channel.Name,
-            Kind = found.Channel is Waveform ? "waveform" : "spectrum",
+            Kind = OutputWords.Kind(found.Channel),
             Unit = found.Channel.Unit,
             Segment = found.Channel.Segment,
             Samples = found.Channel.Count,
             Axis = "none",
             Readings = [.. found.Readings.Select(From)],
-            NotMeasured = [.. found.NotMeasured.Select(n => new NotMeasuredContent(n.Quantity.Id, n.Code, n.Reason))],
+            NotMeasured = [.. found.NotMeasured.Select(n => new NotMeasuredContent(n.Quantity.Id, n.Code, n.Reason, n.AtMost, n.AtLeast))],
             Findings = [.. found.Findings.Select(f => new FindingContent(f.Code, f.Value, f.Text))],
             Verdicts = [.. found.Verdicts.Select(From)],
         };
@@ -45,13 +45,13 @@ public static class ContentMaker
         {
             Waveform { Axis: { IsTimed: true } axis } => content with
             {
-                Axis = Name(axis.Source),
+                Axis = OutputWords.Of(axis.Source),
                 Start = axis.Start,
                 Interval = axis.Interval,
                 IntervalLow = axis.IntervalLow,
                 IntervalHigh = axis.IntervalHigh,
             },
-            SpectrumTrace trace => content with { Axis = Name(trace.Source), Start = trace.Frequencies[0] },
+            SpectrumTrace trace => content with { Axis = OutputWords.Of(trace.Source), Start = trace.Frequencies[0], Interval = trace.EvenStep },
             _ => content,
         };
     }
@@ -70,9 +70,10 @@ public static class ContentMaker
         Method = reading.Method,
         Primary = reading.IsPrimary,
         Count = reading.Count,
+        Expected = reading.Expected,
         Note = reading.Note,
         Budget = [.. reading.Budget.Terms.Select(t => new BudgetTermContent(
-            t.Name, t.Value, t.Distribution.ToString().ToLowerInvariant(), t.Sensitivity, t.Contribution, t.DegreesOfFreedom, t.OfChain))],
+            t.Name, t.Value, OutputWords.Of(t.Distribution), t.Sensitivity, t.Contribution, t.DegreesOfFreedom, t.OfChain))],
     };
 
     private static VerdictContent From(Verdict verdict) => new()
@@ -80,20 +81,14 @@ public static class ContentMaker
         Quantity = verdict.Limit.Quantity.Id,
         Low = verdict.Limit.Low,
         High = verdict.Limit.High,
-        Unit = verdict.Reading?.Unit ?? verdict.Limit.Quantity.Unit,
+        Unit = OutputWords.Unit(verdict),
         Value = verdict.Reading?.Value,
         ExpandedUncertainty = verdict.Reading?.Budget.ExpandedUncertainty,
-        Rule = verdict.Limit.Rule.ToString().ToLowerInvariant(),
+        Rule = OutputWords.Of(verdict.Limit.Rule),
         Guard = verdict.Limit.Guard,
         Probability = verdict.Probability,
-        Outcome = verdict.Outcome switch
-        {
-            VerdictOutcome.NotMeasured => "not-measured",
-            VerdictOutcome.NotApplicable => "not-applicable",
-            VerdictOutcome outcome => outcome.ToString().ToLowerInvariant(),
-        },
+        Outcome = OutputWords.Of(verdict.Outcome),
         Reason = verdict.Reason,
+        LimitLine = verdict.Line is { } place ? new LimitLineContent(place.Line.Name, OutputWords.Of(place.Line.Side), place.Line.Unit, place.Frequency, place.Level, place.LineLevel) : null,
     };
-
-    private static string Name(AxisSource source) => source.ToString().ToLowerInvariant();
 }

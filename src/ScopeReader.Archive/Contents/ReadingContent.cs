@@ -42,6 +42,9 @@ public sealed record ReadingContent
     /// <summary>How many edges, cycles or points it rests on.</summary>
     public int? Count { get; init; }
 
+    /// <summary>What an ideal wave of the measured shape would have; null where nothing is expected.</summary>
+    public double? Expected { get; init; }
+
     /// <summary>The settings behind it, or why it is the primary one.</summary>
     public string? Note { get; init; }
 

@@ -35,4 +35,7 @@ public sealed record VerdictContent
 
     /// <summary>Why.</summary>
     public required string Reason { get; init; }
+
+    /// <summary>Where a limit line was judged; null for a limit on a quantity.</summary>
+    public LimitLineContent? LimitLine { get; init; }
 }

@@ -30,6 +30,19 @@ public sealed class SpectrumTrace : Channel
     /// <summary>Frequencies of the points, Hz, strictly rising.</summary>
     public ReadOnlySpan<double> Frequencies => _frequencies;
 
+    /// <summary>Distance of the points, Hz, where they lie within a hundredth of it of an even grid (files print them rounded); otherwise null.</summary>
+    public double? EvenStep
+    {
+        get
+        {
+            double step = (_frequencies[^1] - _frequencies[0]) / (_frequencies.Length - 1);
+            for (int i = 0; i < _frequencies.Length; i++)
+                if (Math.Abs(_frequencies[i] - (_frequencies[0] + i * step)) > 0.01 * step)
+                    return null;
+            return step;
+        }
+    }
+
     /// <summary>Levels of the points, in <see cref="Channel.Unit"/>.</summary>
     public ReadOnlySpan<double> Levels => _levels;
 

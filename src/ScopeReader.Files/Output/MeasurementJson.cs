@@ -63,19 +63,9 @@ public sealed class MeasurementJson(string program, bool explain)
     private static (double Start, double? Interval) Axis(Channel channel) => channel switch
     {
         Waveform { Axis.IsTimed: true } waveform => (waveform.Axis.Start, waveform.Axis.Interval),
-        SpectrumTrace trace => (trace.Frequencies[0], EvenStep(trace.Frequencies)),
+        SpectrumTrace trace => (trace.Frequencies[0], trace.EvenStep),
         _ => (0, null),
     };
-
-    // Frequencies are printed rounded; a trace whose points lie within a hundredth of a step of an even grid is even.
-    private static double? EvenStep(ReadOnlySpan<double> frequencies)
-    {
-        double step = (frequencies[^1] - frequencies[0]) / (frequencies.Length - 1);
-        for (int i = 0; i < frequencies.Length; i++)
-            if (Math.Abs(frequencies[i] - (frequencies[0] + i * step)) > 0.01 * step)
-                return null;
-        return step;
-    }
 
     internal static ReadingObject Reading(Reading reading, bool explain)
     {

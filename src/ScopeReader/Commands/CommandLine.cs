@@ -40,7 +40,9 @@ internal static class CommandLine
     {
         try
         {
-            RootCommand root = Root(surroundings, bench);
+            // Any verb may be told; its own part of the command line need not know.
+            bool noColour = arguments.TakeWhile(a => a != "--").Any(a => a is "--no-colour" or "--no-color");
+            RootCommand root = Root(surroundings with { Colour = surroundings.Colour && !noColour }, bench);
             // An argument that starts with @ is a file's name here and no list of arguments.
             ParseResult parsed = root.Parse(arguments, new ParserConfiguration { ResponseFileTokenReplacer = null });
             if (parsed.Action is not HelpAction and not HelpByExample and not VersionAction)

@@ -100,7 +100,8 @@ internal sealed class HelpByExample(Surroundings surroundings) : SynchronousComm
         return argument.Arity.MinimumNumberOfValues == 0 ? $"[{name}]" : name;
     }
 
-    private static string Path(Command command) => string.Join(' ', command.Parents.OfType<Command>().Where(c => c is not RootCommand).Append(command).Select(c => c.Name));
+    /// <summary>A verb as it is typed: archive find.</summary>
+    public static string Path(Command command) => string.Join(' ', command.Parents.OfType<Command>().Where(c => c is not RootCommand).Append(command).Select(c => c.Name));
 
     private static string Capitalised(string text) => char.ToUpperInvariant(text[0]) + text[1..] + (text.EndsWith('.') ? "" : ".");
 }

@@ -77,9 +77,9 @@ internal static class UsageCheck
         OptionResult { Tokens.Count: 0 } option => NeedsValue(option.Option),
         OptionResult { Option: Option<bool> } flag => $"{flag.Option.Name} takes no value",
         OptionResult option => $"{option.Option.Name} is given more than once",
-        ArgumentResult argument => $"{command.Name} needs {Article(argument.Argument.Name)}: scopereader {command.Name} {argument.Argument.Name}",
+        ArgumentResult argument => $"{command.Name} needs {Article(argument.Argument.Name)}: scopereader {HelpByExample.Path(command)} {argument.Argument.Name}",
         _ => char.ToLowerInvariant(error.Message[0]) + error.Message[1..].TrimEnd('.'),
     };
 
-    private static string Article(string name) => $"a {name.ToLowerInvariant()}";
+    private static string Article(string name) => $"{("AEIOU".Contains(name[0], StringComparison.Ordinal) ? "an" : "a")} {name.ToLowerInvariant()}";
 }

@@ -44,7 +44,7 @@ public sealed class FindTests : IDisposable
         Assert.NotEmpty(expected);
         Assert.Equal(expected.Length, found.Matches);
         Assert.Equal(expected, found.Entries.Select(e => e.Number).Order());
-        Assert.Empty(found.Doubts);
+        Assert.Empty(found.UnknownNames);
     }
 
     [Fact]
@@ -96,7 +96,7 @@ public sealed class FindTests : IDisposable
     public void A_name_that_nothing_has_is_told()
     {
         Found found = _archive.Find(new ArchiveQuery { Where = [Where("frequncy-error > 20 ppm")] });
-        Assert.Equal("\"frequncy-error\" is neither a quantity nor a condition of any entry", Assert.Single(found.Doubts));
+        Assert.Equal("frequncy-error", Assert.Single(found.UnknownNames));
     }
 
     [Theory]

@@ -19,10 +19,10 @@ internal sealed class AddOptions
     public void AddTo(Command command) => command.Add(_subject, _serial, _operator, _notes, _tags, _set, _captured, _by, _again);
 
     /// <exception cref="UsageException">An option's value is wrong.</exception>
-    public Func<KeptFile, NewEntry> Read(ParseResult parsed)
+    public Func<KeptFile, NewEntry> Read(ParseResult parsed, DateOnly today)
     {
         (string Name, Condition Value)[] set = [.. (parsed.GetValue(_set) ?? []).Select(ArchiveCommand.Condition)];
-        DateTimeOffset? captured = ArchiveCommand.Date(parsed, _captured);
+        DateTimeOffset? captured = ArchiveCommand.PastDate(parsed, _captured, today);
         return file =>
         {
             EntryDetails planned = EntryDetails.From(file.Plan);

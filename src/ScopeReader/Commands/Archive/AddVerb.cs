@@ -23,7 +23,7 @@ internal static class AddVerb
             string[] named = MeasureVerb.CheckedFiles(parsed.GetValue(files)!);
             Plan read = plan.Read(parsed, surroundings.Today);
             string? text = plan.Text(parsed), only = parsed.GetValue(channel);
-            Func<KeptFile, ScopeReader.Archive.NewEntry> describe = details.Read(parsed);
+            Func<KeptFile, ScopeReader.Archive.NewEntry> describe = details.Read(parsed, surroundings.Today);
             return ArchiveCommand.Run(surroundings, () =>
             {
                 using var keeper = new Keeper(ArchiveCommand.PathOf(parsed, archive), describe, surroundings.Output);

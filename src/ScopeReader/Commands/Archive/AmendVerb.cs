@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.Globalization;
 using ScopeReader.Archive;
 using ScopeReader.Archive.Contents;
 using ScopeReader.Commands.Tables;
@@ -8,24 +9,32 @@ namespace ScopeReader.Commands.Archive;
 /// <summary><c>archive amend ENTRY</c>: a correction beside what an entry states.</summary>
 internal static class AmendVerb
 {
-    private static readonly string[] Fields = ["subject", "serial", "operator", "instrument", "calibration-due", "notes", "captured-at"];
+    private static readonly string[] Texts = ["subject", "serial", "operator", "instrument", "notes"];
 
     public static Command Create(Surroundings surroundings)
     {
         Argument<string> entry = ArchiveCommand.EntryNumber();
-        Option<string?>[] fields = [.. Fields.Select(f => PlanOptions.Value("--" + f, f is "calibration-due" or "captured-at" ? "DATE" : "TEXT", $"the right {f.Replace('-', ' ')}; empty for none"))];
+        Option<string?>[] texts = [.. Texts.Select(f => PlanOptions.Value("--" + f, "TEXT", $"the right {f}; empty for none"))];
+        Option<string?> due = PlanOptions.Value("--calibration-due", "DATE", "the day the instrument's calibration runs out; empty for none"), captured = PlanOptions.Value("--captured", "DATE", "when it was captured");
         Option<string[]> set = ArchiveCommand.Several("--set", "NAME=VALUE", "the right condition"), unset = ArchiveCommand.Several("--unset", "NAME", "a condition to take away");
         Option<string[]> tag = ArchiveCommand.Several("--tag", "TAG", "a tag to add"), untag = ArchiveCommand.Several("--untag", "TAG", "a tag to take away");
         Option<string?> archive = ArchiveCommand.Path(), by = ArchiveCommand.By(), reason = ArchiveCommand.Reason();
         var command = new Command("amend", "correct an entry; what it said before stays in its history");
         command.Arguments.Add(entry);
-        command.Add([.. fields, set, unset, tag, untag, reason, by, archive]);
+        command.Add([.. texts, due, captured, set, unset, tag, untag, reason, by, archive]);
         command.SetAction((parsed, cancellation) =>
         {
             int number = ArchiveCommand.Number(parsed.GetValue(entry)!);
             Change[] changes =
             [
-                .. fields.Where(f => parsed.GetValue(f) is not null).Select(f => new Change(f.Name[2..], null, parsed.GetValue(f) is { Length: > 0 } text ? text : null)),
+                .. texts.Where(f => parsed.GetValue(f) is not null).Select(f => new Change(f.Name[2..], null, parsed.GetValue(f) is { Length: > 0 } text ? text : null)),
+                .. parsed.GetValue(due) switch
+                {
+                    null => (Change[])[],
+                    "" => [new Change("calibration-due", null, null)],
+                    _ => [new Change("calibration-due", null, ArchiveCommand.DayOf(parsed, due)!.Value.ToString("yyyy-MM-dd", CultureInfo.InvariantCulture))],
+                },
+                .. ArchiveCommand.PastDate(parsed, captured, surroundings.Today) is { } date ? (Change[])[new Change("captured-at", null, date.ToString("O", CultureInfo.InvariantCulture))] : [],
                 .. (parsed.GetValue(set) ?? []).Select(ArchiveCommand.Condition).Select(c => new Change("condition " + c.Name, null, ConditionText.Format(c.Value))),
                 .. (parsed.GetValue(unset) ?? []).Select(name => new Change("condition " + name, null, null)),
                 .. (parsed.GetValue(tag) ?? []).Select(t => new Change("tag", null, t)),

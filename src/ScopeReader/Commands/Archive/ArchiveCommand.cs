@@ -60,6 +60,25 @@ internal static class ArchiveCommand
             : throw new UsageException($"{option.Name}: expected a date, such as 2026-11-30 or 2026-11-30T14:05, found \"{text}\"");
     }
 
+    /// <summary>When a capture was taken: no later than today, wherever on earth.</summary>
+    public static DateTimeOffset? PastDate(ParseResult parsed, Option<string?> option, DateOnly today)
+    {
+        DateTimeOffset? date = Date(parsed, option);
+        return date is null || DateOnly.FromDateTime(date.Value.UtcDateTime) <= today.AddDays(1)
+            ? date
+            : throw new UsageException($"{option.Name}: {parsed.GetValue(option)} is in the future");
+    }
+
+    /// <summary>A day.</summary>
+    public static DateOnly? DayOf(ParseResult parsed, Option<string?> option)
+    {
+        if (parsed.GetValue(option) is not { } text)
+            return null;
+        return DateOnly.TryParseExact(text, "yyyy-MM-dd", CultureInfo.InvariantCulture, DateTimeStyles.None, out DateOnly day)
+            ? day
+            : throw new UsageException($"{option.Name}: expected a day, such as 2026-11-30, found \"{text}\"");
+    }
+
     /// <summary>NAME=VALUE, the value with its unit.</summary>
     public static (string Name, Condition Value) Condition(string text)
     {

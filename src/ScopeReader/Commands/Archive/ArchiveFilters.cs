@@ -27,13 +27,16 @@ internal sealed class ArchiveFilters
         string? outcome = parsed.GetValue(_verdict);
         if (outcome is not null && !Outcomes.Contains(outcome))
             throw new UsageException($"--verdict: expected one of {string.Join(", ", Outcomes)}, found \"{outcome}\"");
+        (DateTimeOffset? since, DateTimeOffset? until) = (ArchiveCommand.Date(parsed, _since), ArchiveCommand.Date(parsed, _until));
+        if (since >= until)
+            throw new UsageException($"--until: expected a date after that of --since, {parsed.GetValue(_since)}, found \"{parsed.GetValue(_until)}\"");
         return new ArchiveQuery
         {
             Subject = parsed.GetValue(_subject),
             Serial = parsed.GetValue(_serial),
             Tags = parsed.GetValue(_tags) ?? [],
-            Since = ArchiveCommand.Date(parsed, _since),
-            Until = ArchiveCommand.Date(parsed, _until),
+            Since = since,
+            Until = until,
             Text = parsed.GetValue(_text),
             Outcome = outcome,
             Where = [.. (parsed.GetValue(_where) ?? []).Select(Comparison)],

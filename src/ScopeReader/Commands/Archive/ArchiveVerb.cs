@@ -11,7 +11,10 @@ internal static class ArchiveVerb
         foreach (Command verb in (Command[])[AddVerb.Create(surroundings), FindVerb.Create(surroundings), ShowVerb.Create(surroundings), AmendVerb.Create(surroundings),
             TrendVerb.Create(surroundings), RemeasureVerb.Create(surroundings), UpkeepVerbs.Extract(surroundings), UpkeepVerbs.Export(surroundings), UpkeepVerbs.Import(surroundings),
             UpkeepVerbs.Verify(surroundings), UpkeepVerbs.Backup(surroundings), UpkeepVerbs.Stats(surroundings)])
+        {
+            verb.Options.Add(CommandLine.NoColour());
             command.Subcommands.Add(verb);
+        }
         command.SetAction(_ => VerbMissing(command));
         return command;
     }

@@ -4,6 +4,7 @@ using ScopeReader.Archive;
 using ScopeReader.Archive.Exchange;
 using ScopeReader.Archive.Search;
 using ScopeReader.Commands.Tables;
+using ScopeReader.Files.Plans;
 using ScopeReader.Readings;
 
 namespace ScopeReader.Commands.Archive;
@@ -30,12 +31,12 @@ internal static class FindVerb
             {
                 using MeasurementArchive opened = MeasurementArchive.OpenToRead(ArchiveCommand.PathOf(parsed, archive));
                 Found found = opened.Find(parsed.GetValue(json) ? query : query with { Quantities = QuantitiesOf(query) });
-                foreach (string doubt in found.Doubts)
-                    surroundings.Error.WriteLine(SafeText.Of(doubt));
+                foreach (string name in found.UnknownNames)
+                    surroundings.Error.WriteLine(SafeText.Of($"\"{name}\" is neither a quantity nor a condition of any entry; {NearestWord.Hint(name, [.. Quantities.All.Select(q => q.Id)])}"));
                 if (parsed.GetValue(json))
                     surroundings.Output.Write(ArchiveDocuments.Of(found) + "\n");
                 else if (parsed.GetValue(csv))
-                    Csv(found, surroundings.Output);
+                    Csv(found, QuantitiesOf(query), surroundings.Output);
                 else
                     Table(found, query, surroundings);
                 return ExitStatus.Passed;
@@ -47,13 +48,18 @@ internal static class FindVerb
     // A table shows the readings that were asked about.
     private static string[] QuantitiesOf(ArchiveQuery query) => [.. query.Where.Where(w => w.IsQuantity).Select(w => w.Name).Distinct()];
 
-    private static void Csv(Found found, TextWriter output)
+    private static void Csv(Found found, string[] quantities, TextWriter output)
     {
         var table = new SpreadsheetCsv(output);
-        table.Row("id", "subject", "serial", "file", "capturedAt", "addedAt", "outcome", "tags", "conditions", "sha256");
+        table.Row(["id", "subject", "serial", "file", "capturedAt", "addedAt", "outcome", "tags", "conditions", "sha256", .. quantities.SelectMany(q => (string[])[q, q + " unit", q + " expandedUncertainty"])]);
         foreach (FoundEntry e in found.Entries)
+        {
             table.Number(e.Number).Text(e.Subject).Text(e.Serial).Text(e.File).Text(e.CapturedAt.ToString("O", CultureInfo.InvariantCulture)).Text(e.AddedAt.ToString("O", CultureInfo.InvariantCulture))
-                .Text(e.Outcome).Text(string.Join(' ', e.Tags)).Text(ArchiveCommand.Text(e.Conditions)).Text(e.Sha256).End();
+                .Text(e.Outcome).Text(string.Join(' ', e.Tags)).Text(ArchiveCommand.Text(e.Conditions)).Text(e.Sha256);
+            foreach (FoundReading? r in quantities.Select(q => e.Readings.FirstOrDefault(r => r.Quantity == q)))
+                table.Number(r?.Value).Text(r?.Unit).Number(r?.ExpandedUncertainty);
+            table.End();
+        }
     }
 
     private static void Table(Found found, ArchiveQuery query, Surroundings to)

@@ -43,7 +43,8 @@ internal static class RemeasureVerb
                     {
                         (Measurement measurement, MeasurementContext context) = Measure(entry, read.Extract(number), cancellation);
                         Report(entry, ContentMaker.From(measurement, context), surroundings.Output);
-                        write?.Keep(number, measurement, context, ArchiveCommand.ByOf(parsed, by), why);
+                        if (write?.Keep(number, measurement, context, ArchiveCommand.ByOf(parsed, by), why).History[^1] is { } made)
+                            surroundings.Output.WriteLine(SafeText.Of(string.Create(CultureInfo.InvariantCulture, $"  kept as record {made.Record}")));
                     }
                     catch (Exception fault) when (fault is ImportException or PlanException)
                     {

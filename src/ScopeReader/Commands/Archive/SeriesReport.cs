@@ -31,8 +31,8 @@ internal static class SeriesReport
         (string unit, string setting) = (points[0].Unit, points[0].SettingUnit);
         ConditionFit fit = ConditionFit.Of(x, y);
         sheet.Heading(SafeText.Of($"{quantity} against {condition}"));
-        sheet.Columns([["", condition, quantity, "residual"], .. points.Select(p => new[]
-            { SafeText.Of(p.Label), Sheet.Joined(p.SettingText), Sheet.Joined(Engineering.Format(p.Value, p.ExpandedUncertainty, unit)), Engineering.Format(p.Value - fit.Best.At(p.Setting), unit, 2) })]);
+        sheet.Columns([[SafeText.Of(condition), quantity, "residual", ""], .. points.Select(p => new[]
+            { Sheet.Joined(p.SettingText), Sheet.Joined(Engineering.Format(p.Value, p.ExpandedUncertainty, unit)), Sheet.Joined(Residual(p.Value - fit.Best.At(p.Setting), p.ExpandedUncertainty, unit)), SafeText.Of(p.Label) })]);
         foreach (string line in TextPlot.Lines(x, y, unit, [], [], to.Width()))
             sheet.AsItIs(line);
         Slope(sheet, fit, unit, setting);
@@ -41,6 +41,13 @@ internal static class SeriesReport
         if (frequencies is not null)
             Pulling(sheet, frequencies);
         return sheet.ToString();
+    }
+
+    // No finer than the reading itself is known.
+    private static string Residual(double residual, double uncertainty, string unit)
+    {
+        (string value, _, string prefixed) = Engineering.Parts(residual, uncertainty, unit);
+        return $"{value} {prefixed}".TrimEnd();
     }
 
     private static void Slope(Sheet sheet, ConditionFit fit, string unit, string setting)

@@ -25,7 +25,7 @@ internal static class SeriesVerb
         plan.AddTo(command);
         command.Add(against, at, quantity, within, channel);
         filters.AddTo(command);
-        command.Add(archive);
+        command.Add(archive, CommandLine.NoColour());
         command.SetAction((parsed, cancellation) =>
         {
             string condition = parsed.GetValue(against) ?? throw new UsageException("series needs the varied condition: --against CONDITION");
@@ -104,7 +104,7 @@ internal static class SeriesVerb
             var points = new List<SeriesPoint>();
             for (int i = 0; i < measured.Length; i++)
                 if (measured[i].Measurement?.Channels.SelectMany(c => c.Readings).FirstOrDefault(r => r.IsPrimary && r.Quantity.Id == quantity) is { } reading)
-                    points.Add(new SeriesPoint(measured[i].File, settings[i].Value, settings[i].Unit, ArchiveCommand.Text(settings[i]), reading.Value, reading.Budget.ExpandedUncertainty, reading.Unit));
+                    points.Add(new SeriesPoint(Path.GetFileName(measured[i].File), settings[i].Value, settings[i].Unit, ArchiveCommand.Text(settings[i]), reading.Value, reading.Budget.ExpandedUncertainty, reading.Unit));
             return SeriesPoint.InOrder(points, condition);
         };
     }

@@ -9,6 +9,8 @@ namespace ScopeReader.Commands.Archive;
 /// <summary>The verbs that look after an archive: extract, export, import, verify, backup, stats.</summary>
 internal static class UpkeepVerbs
 {
+    private const int HashLength = 64;
+
     public static Command Extract(Surroundings surroundings)
     {
         Argument<string> entry = ArchiveCommand.EntryNumber();
@@ -76,16 +78,22 @@ internal static class UpkeepVerbs
         Option<bool> json = PlanOptions.Flag("--json", "one JSON document");
         var command = new Command("verify", "check every link of the chain and every capture's hash");
         command.Add(head, json, archive);
-        command.SetAction((parsed, cancellation) => ArchiveCommand.Run(surroundings, () =>
+        command.SetAction((parsed, cancellation) =>
         {
-            using MeasurementArchive opened = MeasurementArchive.OpenToRead(ArchiveCommand.PathOf(parsed, archive));
-            Verification check = opened.Verify(parsed.GetValue(head), null, cancellation);
-            if (parsed.GetValue(json))
-                surroundings.Output.Write(ArchiveDocuments.Of(check) + "\n");
-            else
-                Report(check, parsed.GetValue(head) is not null, surroundings);
-            return check.IsSound ? ExitStatus.Passed : ExitStatus.Failed;
-        }, cancellation));
+            string? kept = parsed.GetValue(head)?.Trim();
+            if (kept is not null && (kept.Length != HashLength || !kept.All(char.IsAsciiHexDigit)))
+                throw new UsageException($"--head: expected the {HashLength.ToString(CultureInfo.InvariantCulture)} hexadecimal digits of a hash, found \"{kept}\"");
+            return ArchiveCommand.Run(surroundings, () =>
+            {
+                using MeasurementArchive opened = MeasurementArchive.OpenToRead(ArchiveCommand.PathOf(parsed, archive));
+                Verification check = opened.Verify(kept, null, cancellation);
+                if (parsed.GetValue(json))
+                    surroundings.Output.Write(ArchiveDocuments.Of(check) + "\n");
+                else
+                    Report(check, kept is not null, surroundings);
+                return check.IsSound ? ExitStatus.Passed : ExitStatus.Failed;
+            }, cancellation);
+        });
         return command;
     }
 
@@ -141,10 +149,10 @@ internal static class UpkeepVerbs
     {
         foreach (Damage damage in check.Damages)
             to.Output.WriteLine(SafeText.Of($"{damage.Where}: {damage.What}"));
-        to.Output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{check.Records} records, {check.Captures} captures: {(check.IsSound ? "every link and every hash fits" : $"{check.Damages.Count} do not fit")}"));
+        to.Output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"{Counted(check.Records, "record")}, {Counted(check.Captures, "capture")}: {(check.IsSound ? "every link and every hash fits" : $"{Counted(check.Damages.Count, "thing")} above {(check.Damages.Count == 1 ? "does" : "do")} not fit")}"));
         to.Output.WriteLine($"head {check.Head}");
         if (check.KeptHeadIsRecord is { } at)
-            to.Output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"the head that you kept is record {at}'s: nothing up to it was changed, and {check.Records - at} records came after"));
+            to.Output.WriteLine(string.Create(CultureInfo.InvariantCulture, $"the head that you kept is record {at}'s: {(check.IsSound ? "nothing up to it was changed" : "what was changed is named above")}, and {Counted(check.Records - at, "record")} came after"));
         else if (!headGiven)
             to.Output.WriteLine("a chain that somebody wrote wholly anew fits too: keep the head elsewhere, and give it with --head");
     }
@@ -156,7 +164,7 @@ internal static class UpkeepVerbs
         sheet.Columns(
         [
             ["archive", SafeText.Of(stats.Path)],
-            ["entries", $"{Count(stats.Entries)} of {Count(stats.Subjects)} subjects: {string.Join(", ", stats.Outcomes.Select(o => $"{Count(o.Value)} {o.Key}"))}"],
+            ["entries", $"{Count(stats.Entries)}, {Counted(stats.Subjects, "subject")}: {string.Join(", ", stats.Outcomes.Select(o => $"{Count(o.Value)} {o.Key}"))}"],
             ["records", Count(stats.Records)],
             ["captures", $"{Count(stats.Captures)}, {Size(stats.CaptureBytes)} kept in {Size(stats.PackedBytes)}"],
             ["captured", stats.FirstCapturedAt is null ? "" : $"{stats.FirstCapturedAt[..10]} to {stats.LastCapturedAt![..10]}"],
@@ -165,6 +173,8 @@ internal static class UpkeepVerbs
         ]);
         return sheet.ToString();
     }
+
+    private static string Counted(long count, string what) => string.Create(CultureInfo.InvariantCulture, $"{count} {what}{(count == 1 ? "" : "s")}");
 
     private static string Size(long bytes) => bytes < 1000 ? $"{bytes.ToString(CultureInfo.InvariantCulture)} B" : Engineering.Format(bytes, "B", 3);
 }

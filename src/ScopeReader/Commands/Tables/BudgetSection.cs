@@ -1,5 +1,4 @@
 using System.Globalization;
-using ScopeReader.Files.Output;
 using ScopeReader.Readings;
 
 namespace ScopeReader.Commands.Tables;

@@ -1,7 +1,6 @@
 using System.Globalization;
 using ScopeReader.Captures;
 using ScopeReader.Files;
-using ScopeReader.Files.Output;
 using ScopeReader.Readings;
 
 namespace ScopeReader.Commands.Tables;

@@ -9,6 +9,8 @@ internal sealed class Sheet
     // Stands for a space at which no line breaks, until the lines are made. Text from files never has it: it is private use.
     internal const char Joint = '\uE000';
 
+    private const int Gap = 2, NarrowestColumn = 8;
+
     private readonly StringBuilder _text = new();
     private readonly IAnsiConsole _console;
     private readonly bool _colour;
@@ -58,15 +60,23 @@ internal sealed class Sheet
     /// <summary>Text with a margin, wrapped inside it.</summary>
     public void Indented(string text, int margin = 2) => _console.Write(new Padder(new Paragraph(text), new Padding(margin, 0, 0, 0)));
 
-    /// <summary>Rows of cells in columns; the last column wraps, the others never do.</summary>
+    /// <summary>Rows of cells in columns; the last column wraps, the others never do. Where the width leaves it no room, a row
+    /// is a line of its cells, wrapped.</summary>
     public void Columns(IReadOnlyList<string[]> rows, Func<int, Style>? firstColumn = null)
     {
         if (rows.Count == 0)
             return;
+        int first = Enumerable.Range(0, rows[0].Length - 1).Sum(i => rows.Max(r => new Paragraph(r[i]).Length) + Gap), last = rows.Max(r => new Paragraph(r[^1]).Length);
+        if (Width - first < Math.Min(last, NarrowestColumn))
+        {
+            for (int r = 0; r < rows.Count; r++)
+                Line(string.Join(new string(' ', Gap), rows[r].Where(cell => cell.Length > 0)), firstColumn?.Invoke(r));
+            return;
+        }
         var table = new Table { Border = TableBorder.None, ShowHeaders = false };
         int count = rows[0].Length;
         for (int i = 0; i < count; i++)
-            table.AddColumn(new TableColumn("") { NoWrap = i < count - 1, Padding = new Padding(0, 0, i < count - 1 ? 2 : 0, 0) });
+            table.AddColumn(new TableColumn("") { NoWrap = i < count - 1, Padding = new Padding(0, 0, i < count - 1 ? Gap : 0, 0) });
         for (int r = 0; r < rows.Count; r++)
             table.AddRow(rows[r].Select((cell, i) => new Paragraph(cell, i == 0 && firstColumn is not null ? firstColumn(r) : Style.Plain)));
         _console.Write(table);

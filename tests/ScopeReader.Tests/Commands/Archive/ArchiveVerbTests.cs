@@ -40,7 +40,7 @@ public sealed class ArchiveVerbTests : IDisposable
     public async Task Measuring_again_with_the_same_program_changes_nothing_and_is_kept_where_that_is_asked()
     {
         await Archive("add", Run.Demo("if-source-7.csv"), "--plan", Run.Demo("if-source.toml"));
-        Assert.Matches("^entry 1, if-source-7.csv: nothing changed, [a-z]+\n$", (await Archive("remeasure", "1", "--keep", "--reason", "a trial")).Output);
+        Assert.Matches("^entry 1, if-source-7.csv: nothing changed, [a-z]+\n  kept as record 2\n$", (await Archive("remeasure", "1", "--keep", "--reason", "a trial")).Output);
         using MeasurementArchive archive = MeasurementArchive.OpenToRead(File);
         Assert.Equal(["entry", "measurement"], archive.Show(1).History.Select(h => h.Kind));
     }
@@ -88,12 +88,51 @@ public sealed class ArchiveVerbTests : IDisposable
     }
 
     [Theory]
+    [InlineData(20)]
+    [InlineData(40)]
+    [InlineData(80)]
+    [InlineData(200)]
+    public async Task Nothing_in_an_entry_reaches_the_terminal_and_nothing_runs_past_its_width(int width)
+    {
+        string hostile = "\u001b[31mred\u0007\nsecond line \u202e=HYPERLINK(\"x\")";
+        await Archive("add", Run.Demo("if-source-7.csv"), "--plan", Run.Demo("if-source.toml"), "--subject", hostile, "--notes", hostile, "--tag", hostile, "--serial", "=1+1", "--set", "supply=5V");
+        foreach (string[] verb in (string[][])[["find"], ["show", "1"], ["trend", "rise-time"], ["stats"], ["find", "--where", "frequency-error < 1 %"]])
+        {
+            (int status, string output, string error) = await Run.At(width, ["archive", .. verb, "--archive", File], null);
+            Assert.Equal((0, ""), (status, error));
+            Assert.DoesNotContain(output, c => char.IsControl(c) && c != '\n');
+            Assert.DoesNotContain('\u202e', output);
+            // A path, a hash and a name without spaces are one word: broken or not, they end where the line does.
+            Assert.All(output.Split('\n'), line => Assert.InRange(line.Length, 0, Math.Max(width, 35)));
+        }
+        Assert.DoesNotContain("\n=", (await Archive("find", "--csv")).Output.Replace(",", "\n", StringComparison.Ordinal), StringComparison.Ordinal);
+    }
+
+    [Fact]
+    public async Task A_misspelt_quantity_finds_nothing_and_says_why()
+    {
+        await Archive("add", Run.Demo("if-source-7.csv"));
+        (int status, string output, string error) = await Archive("find", "--where", "frequncy-error > 20 ppm");
+        Assert.Equal((0, "0 entries\n", "\"frequncy-error\" is neither a quantity nor a condition of any entry; the nearest is frequency-error\n"), (status, output, error));
+    }
+
+    [Theory]
     [InlineData(3, "there is no archive here", "find")]
     [InlineData(64, "--where: expected a comparison", "find", "--where", "frequency-error")]
     [InlineData(64, "--verdict: expected one of", "find", "--verdict", "good")]
     [InlineData(64, "amend needs a reason", "amend", "1", "--subject", "x")]
     [InlineData(64, "expected an entry's number, such as 12, found \"x\"", "show", "x")]
     [InlineData(64, "--set: expected a name and a value, such as supply=5V, found \"supply\"", "add", "no.csv", "--set", "supply")]
+    [InlineData(64, "add needs a file: scopereader archive add FILE", "add")]
+    [InlineData(64, "show needs an entry: scopereader archive show ENTRY", "show")]
+    [InlineData(64, "--captured: 2999-01-01 is in the future", "add", "no.csv", "--captured", "2999-01-01")]
+    [InlineData(64, "--captured: expected a date, such as 2026-11-30 or 2026-11-30T14:05, found \"yesterday\"", "amend", "1", "--captured", "yesterday", "--reason", "x")]
+    [InlineData(64, "--calibration-due: expected a day, such as 2026-11-30, found \"2026-13-01\"", "amend", "1", "--calibration-due", "2026-13-01", "--reason", "x")]
+    [InlineData(64, "--until: expected a date after that of --since, 2026-01-01, found \"2025-01-01\"", "find", "--since", "2026-01-01", "--until", "2025-01-01")]
+    [InlineData(64, "--since: expected a date, such as 2026-11-30 or 2026-11-30T14:05, found \"2025-02-30\"", "find", "--since", "2025-02-30")]
+    [InlineData(64, "--head: expected the 64 hexadecimal digits of a hash, found \"abc\"", "verify", "--head", "abc")]
+    [InlineData(64, "--limit: expected a whole number above zero, found \"0\"", "find", "--limit", "0")]
+    [InlineData(64, "unexpected \"extra\" after verify", "verify", "extra")]
     [InlineData(64, "unknown quantity \"rise-tim\"; the nearest is rise-time", "trend", "rise-tim")]
     public async Task What_is_wrong_is_one_line_and_a_status(int status, string problem, params string[] arguments)
     {

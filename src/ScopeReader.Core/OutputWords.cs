@@ -2,7 +2,7 @@ using ScopeReader.Captures;
 using ScopeReader.Limits;
 using ScopeReader.Readings;
 
-namespace ScopeReader.Files.Output;
+namespace ScopeReader;
 
 /// <summary>The words that files for programs use for what the code has as types.</summary>
 public static class OutputWords
