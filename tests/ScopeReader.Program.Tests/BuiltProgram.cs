@@ -9,11 +9,8 @@ internal static class BuiltProgram
     /// <summary>The folder that holds README.md.</summary>
     public static string Root { get; } = FindRoot();
 
-    /// <summary>Runs it in <see cref="Root"/> and waits for its end.</summary>
-    public static Task<(int Status, string Output, string Error)> Run(params IEnumerable<string> arguments) => RunAt(80, arguments);
-
-    /// <summary>Runs it for lines of so many columns.</summary>
-    public static async Task<(int Status, string Output, string Error)> RunAt(int columns, params IEnumerable<string> arguments)
+    /// <summary>Starts it in <see cref="Root"/> for lines of so many columns.</summary>
+    public static Process Start(int columns, params IEnumerable<string> arguments)
     {
         var start = new ProcessStartInfo("dotnet") { WorkingDirectory = Root, RedirectStandardOutput = true, RedirectStandardError = true, RedirectStandardInput = true };
         // The program's own file lies beside this test's, where the build puts what it references.
@@ -23,7 +20,16 @@ internal static class BuiltProgram
         start.Environment["NO_COLOR"] = "1";
         start.Environment["COLUMNS"] = columns.ToString(CultureInfo.InvariantCulture);
 
-        using Process process = Process.Start(start)!;
+        return Process.Start(start)!;
+    }
+
+    /// <summary>Runs it in <see cref="Root"/> and waits for its end.</summary>
+    public static Task<(int Status, string Output, string Error)> Run(params IEnumerable<string> arguments) => RunAt(80, arguments);
+
+    /// <summary>Runs it for lines of so many columns.</summary>
+    public static async Task<(int Status, string Output, string Error)> RunAt(int columns, params IEnumerable<string> arguments)
+    {
+        using Process process = Start(columns, arguments);
         process.StandardInput.Close();
         using var limit = new CancellationTokenSource(TimeSpan.FromMinutes(1));
         Task<string> output = process.StandardOutput.ReadToEndAsync(limit.Token), error = process.StandardError.ReadToEndAsync(limit.Token);

@@ -29,4 +29,25 @@ public sealed record ImportSettings
 
     /// <summary>Number of the segment to measure, from 1; null for all.</summary>
     public int? Segment { get; init; }
+
+    /// <summary>What the values are multiplied by to be in their unit: what the export left out, such as volts per count.</summary>
+    public double? Factor { get; init; }
+
+    /// <summary>These settings and, where they say nothing, others.</summary>
+    public ImportSettings Or(ImportSettings others)
+    {
+        ArgumentNullException.ThrowIfNull(others);
+        return new ImportSettings
+        {
+            Delimiter = Delimiter ?? others.Delimiter,
+            DecimalMark = DecimalMark ?? others.DecimalMark,
+            FirstLine = FirstLine ?? others.FirstLine,
+            Encoding = Encoding ?? others.Encoding,
+            Interval = Interval ?? others.Interval,
+            Columns = Columns ?? others.Columns,
+            Units = Units ?? others.Units,
+            Segment = Segment ?? others.Segment,
+            Factor = Factor ?? others.Factor,
+        };
+    }
 }

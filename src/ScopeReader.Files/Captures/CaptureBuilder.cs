@@ -10,6 +10,7 @@ namespace ScopeReader.Files;
 /// <summary>Makes channels of the blocks of numbers of a file.</summary>
 internal sealed class CaptureBuilder(string file, ImportSettings settings, double scale)
 {
+    private readonly double _scale = scale * (settings.Factor ?? 1);
     private readonly List<Channel> _channels = [];
     private readonly List<ChannelReport> _reports = [];
     private readonly Dictionary<string, int> _segments = [];
@@ -38,7 +39,7 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
     {
         List<SampleSource> sources = SampleSource.Of(table, settings);
         if (sources.Count == 0)
-            throw new ImportException(file, "expected a column of samples beside the axis, found none. Name the columns under [import].", table.FirstLine);
+            throw new ImportException(file, "expected a column of samples beside the axis, found none. Name the columns with --columns time,CH1,…", table.FirstLine);
         var times = new Dictionary<int, List<TimedPiece>>();
         foreach (SampleSource source in sources)
         {
@@ -53,6 +54,13 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
                 WaveformBuilder.Add(this, table, source, pieces);
             }
         }
+    }
+
+    /// <summary>Notes something once, however often it is met.</summary>
+    public void Doubt(string sentence)
+    {
+        if (!Doubts.Contains(sentence))
+            Doubts.Add(sentence);
     }
 
     /// <summary>Keeps the file's first axis for the report.</summary>
@@ -88,18 +96,18 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
         _reports.Add(new ChannelReport(trace.Name, "spectrum", trace.Unit, trace.Segment, trace.Count, minimum, maximum, 0, missing));
     }
 
-    /// <summary>Values in the base unit, multiplied by the chain's scale; levels in dB shift instead.</summary>
+    /// <summary>Values in the base unit, multiplied by the import's factor and the chain's scale; levels in dB shift instead.</summary>
     public void Scale(Span<double> values, string unit, double factor)
     {
         if (unit.StartsWith("dB", StringComparison.Ordinal))
         {
-            double shift = scale == 1 ? 0 : 20 * Math.Log10(Math.Abs(scale));
+            double shift = _scale == 1 ? 0 : 20 * Math.Log10(Math.Abs(_scale));
             for (int i = 0; shift != 0 && i < values.Length; i++)
                 values[i] += shift;
             return;
         }
-        for (int i = 0; (factor != 1 || scale != 1) && i < values.Length; i++)
-            values[i] = UnitWords.Scale(values[i], factor) * scale;
+        for (int i = 0; (factor != 1 || _scale != 1) && i < values.Length; i++)
+            values[i] = UnitWords.Scale(values[i], factor) * _scale;
     }
 
     private static (double Minimum, double Maximum) Range(ReadOnlySpan<double> values)

@@ -1,7 +1,4 @@
 using ScopeReader.Captures;
-using ScopeReader.Files.Rows;
-using ScopeReader.Files.Structure;
-using ScopeReader.Files.Text;
 
 namespace ScopeReader.Files;
 
@@ -10,19 +7,32 @@ public static class CaptureReader
 {
     /// <summary>Reads a file; <c>-</c> is standard input.</summary>
     /// <param name="path">The file as the person named it.</param>
-    /// <param name="settings">What the person says about it.</param>
+    /// <param name="settings">What the person says about it; where they say nothing, what its folder remembers counts.</param>
     /// <param name="scale">Multiplies the values (the chain's scale); levels in dB shift by 20 log of it.</param>
     /// <param name="cancellation">Stops the work.</param>
     /// <exception cref="ImportException">The file is not there, cannot be read, or is no capture.</exception>
     /// <exception cref="OperationCanceledException">The work was stopped.</exception>
-    public static CaptureFile Read(string path, ImportSettings settings, double scale = 1, CancellationToken cancellation = default)
+    public static CaptureFile Read(string path, ImportSettings settings, double scale = 1, CancellationToken cancellation = default) =>
+        Read(path, settings, scale, null, cancellation);
+
+    /// <summary>Reads a file and tells how far it is; <c>-</c> is standard input.</summary>
+    /// <param name="path">The file as the person named it.</param>
+    /// <param name="settings">What the person says about it; where they say nothing, what its folder remembers counts.</param>
+    /// <param name="scale">Multiplies the values.</param>
+    /// <param name="progress">Told of every few megabytes; from the thread that reads.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <exception cref="ImportException">The file is not there, cannot be read, or is no capture, or its folder's memory cannot be used.</exception>
+    /// <exception cref="OperationCanceledException">The work was stopped.</exception>
+    public static CaptureFile Read(string path, ImportSettings settings, double scale, IProgress<ImportProgress>? progress, CancellationToken cancellation)
     {
         ArgumentException.ThrowIfNullOrEmpty(path);
+        ArgumentNullException.ThrowIfNull(settings);
+        var import = new ImportJob(path == "-" ? "standard input" : path, settings, scale) { Progress = progress, Cancellation = cancellation };
         if (path == "-")
-            return Read(Console.OpenStandardInput(), "standard input", settings, scale, cancellation);
+            return import.Read(Console.OpenStandardInput());
         try
         {
-            return Read(new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite | FileShare.Delete, 0, FileOptions.SequentialScan), path, settings, scale, cancellation);
+            return (import with { Memory = FolderMemory.For(path) }).Read(new FileStream(path, FileMode.Open, FileAccess.Read, FileShare.ReadWrite | FileShare.Delete, 0, FileOptions.SequentialScan));
         }
         catch (Exception e) when (e is FileNotFoundException or DirectoryNotFoundException)
         {
@@ -48,59 +58,6 @@ public static class CaptureReader
     {
         ArgumentNullException.ThrowIfNull(stream);
         ArgumentNullException.ThrowIfNull(settings);
-        try
-        {
-            using var text = new Utf8Text(stream, file, settings.Encoding);
-            return Read(text, file, settings, scale, cancellation);
-        }
-        catch (Exception e) when (e is IOException or InvalidDataException)
-        {
-            throw new ImportException(file, $"expected to read it to its end, found: {Excerpt.Of(e.Message, 120)} Save or copy it again.", cause: e);
-        }
+        return new ImportJob(file, settings, scale) { Cancellation = cancellation }.Read(stream);
     }
-
-    private static CaptureFile Read(Utf8Text text, string file, ImportSettings settings, double scale, CancellationToken cancellation)
-    {
-        var sequence = new TableSequence(new TextWindow(text, file), file, settings);
-        var capture = new CaptureBuilder(file, settings, scale);
-        Table? first = null;
-        while (sequence.Next(cancellation) is { } table)
-        {
-            first ??= table;
-            capture.Add(table);
-            if (table.IsCut)
-                capture.Doubts.Add("the last line breaks off: it was left out");
-        }
-        string hash = text.Finish();
-        if (text.IsCut)
-            capture.Doubts.Add("the compressed file breaks off: what could be unpacked of it was read");
-        if (capture.Channels.Count == 0)
-            throw new ImportException(file, FormattableString.Invariant($"expected a segment {settings.Segment}, found none of that number. Run inspect to see the segments."));
-        return new CaptureFile(
-            new Capture(file, hash, capture.Channels, capture.Doubts),
-            new ImportReport
-            {
-                File = file,
-                Encoding = text.EncodingName,
-                Delimiter = NameOf(first!.Shape),
-                DecimalMark = first.Shape.Mark.ToString(),
-                PreambleLines = first.Header.FirstRow,
-                HeaderRows = first.Header.Rows,
-                FirstLine = first.FirstLine,
-                Axis = capture.Axis!,
-                Channels = capture.Reports,
-                Doubts = capture.Doubts,
-            });
-    }
-
-    private static string NameOf(TableShape shape) => shape switch
-    {
-        { Columns: [0] } when shape.Rows[shape.First].Length == 1 => "none",
-        { Delimiter: ',' } => "comma",
-        { Delimiter: ';' } => "semicolon",
-        { Delimiter: '\t' } => "tab",
-        { Delimiter: '|' } => "bar",
-        { Delimiter: RowSplitter.Spaces } => "spaces",
-        _ => shape.Delimiter.ToString(),
-    };
 }

@@ -30,6 +30,9 @@ public sealed record ImportReport
     /// <summary>The channels, in the file's order.</summary>
     public required IReadOnlyList<ChannelReport> Channels { get; init; }
 
+    /// <summary>What the file's folder remembers and was used, such as "decimal comma"; empty where nothing was.</summary>
+    public IReadOnlyList<string> Remembered { get; init; } = [];
+
     /// <summary>What was assumed or noticed, a sentence each; the same as the capture's.</summary>
     public required IReadOnlyList<string> Doubts { get; init; }
 }

@@ -25,7 +25,7 @@ internal sealed record SampleSource(int Index, int Axis, string Name, string Uni
             if (table.Roles[i] != ColumnRole.Value)
                 continue;
             int column = table.Shape.Columns[i];
-            (string unit, double factor) = UnitOf(table, settings, i, column);
+            (string unit, double factor) = UnitOf(table, i);
             sources.Add(new SampleSource(i, axis, NameOf(table, settings, i, column, sources, values), unit, factor));
         }
         return sources;
@@ -43,10 +43,8 @@ internal sealed record SampleSource(int Index, int Axis, string Name, string Uni
         return before.Any(s => s.Name == name) ? string.Create(CultureInfo.InvariantCulture, $"{name} ({before.Count + 1})") : name;
     }
 
-    private static (string Unit, double Factor) UnitOf(Table table, ImportSettings settings, int i, int column)
+    private static (string Unit, double Factor) UnitOf(Table table, int i)
     {
-        if (settings.Units is { } units && column < units.Count && UnitWords.TryRead(units[column], out double given, out string named))
-            return (named, given);
         Label label = table.Header.Labels[i];
         if (label.Unit is { Length: > 0 } unit)
             return (unit, label.Factor);

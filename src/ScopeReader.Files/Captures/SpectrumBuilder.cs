@@ -101,8 +101,8 @@ internal static class SpectrumBuilder
     {
         if (table.Facts.Word(Fact.AxisUnit) is { } word && Label.TryUnit(word, out double stated, out string unit) && unit == "Hz")
             factor = stated;
-        else if (!capture.Doubts.Contains("the unit of the frequencies is not stated: taken as hertz"))
-            capture.Doubts.Add("the unit of the frequencies is not stated: taken as hertz");
+        else
+            capture.Doubt("the unit of the frequencies is not stated: taken as hertz");
     }
 
     private static bool IsFalling(ReadOnlySpan<double> values)

@@ -16,7 +16,7 @@ internal static class WaveformBuilder
             if (AddPiece(capture, source, column.Memory.Slice(piece.First, piece.Length), column.Missing, piece))
                 added++;
         if (added == 0)
-            throw new ImportException(capture.File, $"expected numbers in {source.Name}, found none. Leave the column out with \"skip\" in columns under [import].", table.FirstLine, table.Shape.Columns[source.Index] + 1);
+            throw new ImportException(capture.File, $"expected numbers in {source.Name}, found none. Leave the column out: --columns with skip in its place.", table.FirstLine, table.Shape.Columns[source.Index] + 1);
     }
 
     private static bool AddPiece(CaptureBuilder capture, SampleSource source, Memory<double> samples, int missingInColumn, TimedPiece piece)

@@ -7,7 +7,7 @@ namespace ScopeReader.Files.Output;
 internal sealed record InspectionDocument(string Format, int Version, string Program, IReadOnlyList<InspectionObject> Captures);
 
 internal sealed record InspectionObject(string File, string? Error, string? Encoding, string? Delimiter, string? DecimalMark, int? PreambleLines, int? HeaderRows,
-    AxisObject? Axis, IReadOnlyList<InspectedChannelObject> Channels, IReadOnlyList<string> Doubts);
+    AxisObject? Axis, IReadOnlyList<InspectedChannelObject> Channels, IReadOnlyList<string> Doubts, IReadOnlyList<string> Remembered);
 
 internal sealed record AxisObject(string Source, string Unit, double? Interval, double? IntervalLow, double? IntervalHigh, double? WorstDeviation);
 

@@ -1,11 +1,12 @@
 using System.Text;
+using Tomlyn;
 using Tomlyn.Parsing;
 using Tomlyn.Syntax;
 
 namespace ScopeReader.Files.Plans;
 
-/// <summary>A plan's text as tables of keys, each with its line, over the lossless syntax tree it came from.</summary>
-/// <remarks>The tree keeps comments and layout, so that a plan can be changed in place.</remarks>
+/// <summary>A plan's text as tables of keys, each with its place.</summary>
+/// <remarks>The places make it possible to change a value and leave comments and layout as they are.</remarks>
 internal sealed class PlanDocument
 {
     /// <summary>Name of the keys above the first table.</summary>
@@ -13,9 +14,9 @@ internal sealed class PlanDocument
 
     private readonly List<PlanSection> _sections = [];
 
-    private PlanDocument(DocumentSyntax syntax, string file) => (Syntax, File) = (syntax, file);
+    private PlanDocument(string text, string file) => (Text, File) = (text, file);
 
-    public DocumentSyntax Syntax { get; }
+    public string Text { get; }
 
     public string File { get; }
 
@@ -31,14 +32,14 @@ internal sealed class PlanDocument
             DiagnosticMessage first = syntax.Diagnostics.Where(d => d.Kind == DiagnosticMessageKind.Error).MinBy(d => d.Span.Start.Offset)!;
             throw new PlanException(file, first.Span.Start.Line + 1, $"not readable as TOML: {Decapitalised(first.Message)}");
         }
-        var document = new PlanDocument(syntax, file);
+        var document = new PlanDocument(text, file);
         var top = new PlanSection(Top, IsList: false, Line: 1);
         document._sections.Add(top);
         foreach (KeyValueSyntax pair in syntax.KeyValues)
             document.AddTop(top, pair);
         foreach (TableSyntaxBase table in syntax.Tables)
         {
-            var section = new PlanSection(Name(table.Name!), table is TableArraySyntax, Line(table));
+            var section = new PlanSection(Name(table.Name!), table is TableArraySyntax, Line(table), table.CloseBracket!.Span.End.Offset + 1);
             document._sections.Add(section);
             foreach (KeyValueSyntax pair in table.Items)
                 section.Add(Name(pair.Key!), document.Value(Name(pair.Key!), pair));
@@ -56,6 +57,10 @@ internal sealed class PlanDocument
         {
             // The parser's lexer trips over an escape that stands for no character, and does not say where: the first may be it.
             throw new PlanException(file, text.AsSpan(0, Math.Max(0, text.IndexOf('\\'))).Count('\n') + 1, "not readable as TOML: a text in it has a backslash that begins no escape; write \\\\ for a backslash");
+        }
+        catch (TomlException)
+        {
+            throw new PlanException(file, null, "not readable as TOML: its lists and tables are nested deeper than any plan's");
         }
     }
 
@@ -88,7 +93,7 @@ internal sealed class PlanDocument
         return section;
     }
 
-    private PlanValue Value(string key, KeyValueSyntax pair) => new(File, key, Line(pair), pair.Value!);
+    private PlanValue Value(string key, KeyValueSyntax pair) => new(this, key, Line(pair), pair.Value!);
 
     private static int Line(SyntaxNodeBase node) => node.Span.Start.Line + 1;
 
@@ -108,7 +113,7 @@ internal sealed class PlanDocument
 }
 
 /// <summary>One table of a plan.</summary>
-internal sealed record PlanSection(string Name, bool IsList, int Line)
+internal sealed record PlanSection(string Name, bool IsList, int Line, int NameEnd = 0)
 {
     private readonly List<(string Key, PlanValue Value)> _entries = [];
 

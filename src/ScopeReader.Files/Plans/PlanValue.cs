@@ -5,18 +5,18 @@ using Tomlyn.Syntax;
 namespace ScopeReader.Files.Plans;
 
 /// <summary>A key's value in a plan, read as what the key needs or refused with its place.</summary>
-internal sealed class PlanValue(string file, string key, int line, ValueSyntax syntax)
+internal sealed class PlanValue(PlanDocument document, string key, int line, ValueSyntax syntax)
 {
     public string Key => key;
 
     public int Line => line;
 
     /// <summary>A refusal that names the file, the line and the key.</summary>
-    public PlanException Wrong(string problem) => new(file, line, $"{key}: {problem}");
+    public PlanException Wrong(string problem) => new(document.File, line, $"{key}: {problem}");
 
     /// <summary>A refusal of a word that the reader does not know.</summary>
     public PlanException Unknown(string kind, string word, IEnumerable<string> known) =>
-        new(file, line, $"unknown {kind} \"{word}\"; {NearestWord.Hint(word, [.. known])}");
+        new(document.File, line, $"unknown {kind} \"{word}\"; {NearestWord.Hint(word, [.. known])}");
 
     public string Text() => syntax is StringValueSyntax { Value: { } text } ? text : throw Wrong($"expected text in quotes, found {Found}");
 
@@ -28,7 +28,7 @@ internal sealed class PlanValue(string file, string key, int line, ValueSyntax s
             : throw Wrong($"expected text with a number and its unit, such as \"{PlanUnits.Example(unit)}\", found {Found}");
         if (!Units.TryParse(text, unit, out double value, out string problem))
             throw PlanUnits.MistypedUnit(text, unit) is { } nearest
-                ? new PlanException(file, line, $"{key}: unknown unit \"{PlanUnits.UnitOf(text)}\"; the nearest is {nearest}")
+                ? new PlanException(document.File, line, $"{key}: unknown unit \"{PlanUnits.UnitOf(text)}\"; the nearest is {nearest}")
                 : Wrong(problem);
         return value >= least ? value : throw Wrong($"expected {AtLeast(least, unit)}, found {Found}");
     }
@@ -46,7 +46,7 @@ internal sealed class PlanValue(string file, string key, int line, ValueSyntax s
         string text = Plain ?? Text();
         if (!Units.TryParse(text, out double value, out string unit))
             throw PlanUnits.UnitOf(text) is { Length: > 0 } suffix && suffix.Length < text.Trim().Length
-                ? new PlanException(file, line, $"{key}: unknown unit \"{suffix}\"; the nearest is {NearestWord.Of(suffix, PlanUnits.All)}")
+                ? new PlanException(document.File, line, $"{key}: unknown unit \"{suffix}\"; the nearest is {NearestWord.Of(suffix, PlanUnits.All)}")
                 : Wrong($"expected a number with its unit, such as \"5.0 V\", found {Found}");
         return (value, unit.Length == 0 ? "1" : unit);
     }
@@ -84,7 +84,7 @@ internal sealed class PlanValue(string file, string key, int line, ValueSyntax s
 
     /// <summary>The items of a list, each a value of its own.</summary>
     public IReadOnlyList<PlanValue> Items() => syntax is ArraySyntax array
-        ? [.. array.Items.Select(item => new PlanValue(file, key, item.Value!.Span.Start.Line + 1, item.Value))]
+        ? [.. array.Items.Select(item => new PlanValue(document, key, item.Value!.Span.Start.Line + 1, item.Value))]
         : throw Wrong($"expected a list in [ ], found {Found}");
 
     /// <summary>A percentage: a plain number, or text with its unit.</summary>
@@ -94,15 +94,24 @@ internal sealed class PlanValue(string file, string key, int line, ValueSyntax s
     public double? Number() => Plain is { } plain && double.TryParse(plain, NumberStyles.Float, CultureInfo.InvariantCulture, out double value) && double.IsFinite(value) ? value : null;
 
     /// <summary>The value as the file has it, short enough for a line.</summary>
-    public string Found
+    public string Found => Written is { Length: > 60 } text ? text[..57] + "..." : Written;
+
+    /// <summary>The value as the file has it.</summary>
+    public string Written => document.Text[Start..End];
+
+    /// <summary>The value without quotes and brackets, for a sentence.</summary>
+    public string Said => syntax switch
     {
-        get
-        {
-            string text = syntax.ToString() ?? "";
-            text = text.Trim();
-            return text.Length <= 60 ? text : text[..57] + "...";
-        }
-    }
+        StringValueSyntax { Value: { } text } => text,
+        ArraySyntax => string.Join(", ", Items().Select(i => i.Said)),
+        _ => Written,
+    };
+
+    /// <summary>Where it begins in the file's text.</summary>
+    public int Start => syntax.Span.Start.Offset;
+
+    /// <summary>Where it ends: the first character that is not its own.</summary>
+    public int End => syntax.Span.End.Offset + 1;
 
     // TOML's own numbers, as text; underscores between digits are TOML's.
     private string? Plain => syntax switch

@@ -13,14 +13,15 @@ internal static class CaptureMeasurer
     /// <param name="file">The file as the person named it.</param>
     /// <param name="plan">The plan, with what the command line says in it.</param>
     /// <param name="channel">Measure only this channel; null for all.</param>
+    /// <param name="progress">Is told how far it is; null for nobody.</param>
     /// <param name="cancellation">Stops the work.</param>
     /// <returns>The measurement, or why the file could not be read.</returns>
-    public static MeasuredFile Measure(string file, Plan plan, string? channel, CancellationToken cancellation)
+    public static MeasuredFile Measure(string file, Plan plan, string? channel, ProgressLine? progress, CancellationToken cancellation)
     {
         try
         {
-            Capture capture = Read(file, plan, channel, cancellation);
-            return new MeasuredFile(capture.File, Analysis.Measure(capture, plan, null, cancellation), null);
+            Capture capture = Read(file, plan, channel, progress, cancellation);
+            return new MeasuredFile(capture.File, Analysis.Measure(capture, plan, progress?.Measuring(file), cancellation), null);
         }
         catch (ImportException e)
         {
@@ -66,8 +67,8 @@ internal static class CaptureMeasurer
         }
     }
 
-    private static Capture Read(string file, Plan plan, string? channel, CancellationToken cancellation) =>
-        Chosen(CaptureReader.Read(file, plan.Import, plan.Chain.Scale, cancellation).Capture, file, plan, channel);
+    private static Capture Read(string file, Plan plan, string? channel, ProgressLine? progress, CancellationToken cancellation) =>
+        Chosen(CaptureReader.Read(file, plan.Import, plan.Chain.Scale, progress?.Reading(file), cancellation).Capture, file, plan, channel);
 
     private static Capture Chosen(Capture capture, string file, Plan plan, string? channel)
     {

@@ -30,6 +30,9 @@ internal static class CommandLine
     /// <summary>Name and version, as outputs carry them.</summary>
     public static string ProgramAndVersion { get; } = $"scopereader {typeof(CommandLine).Assembly.GetName().Version!.ToString(3)}";
 
+    // How long work that was told to stop may take to do so; a read of a pipe that nobody writes to would take for ever.
+    private static readonly TimeSpan Moment = TimeSpan.FromSeconds(0.5);
+
     /// <summary>Runs the program.</summary>
     /// <param name="arguments">The arguments, without the program's own name.</param>
     /// <param name="surroundings">What it writes to.</param>
@@ -47,7 +50,7 @@ internal static class CommandLine
             ParseResult parsed = root.Parse(arguments, new ParserConfiguration { ResponseFileTokenReplacer = null });
             if (parsed.Action is not HelpAction and not HelpByExample and not VersionAction)
                 UsageCheck.Check(parsed);
-            return await parsed.InvokeAsync(new InvocationConfiguration { EnableDefaultExceptionHandler = false, Output = surroundings.Output, Error = surroundings.Error }, cancellation);
+            return await parsed.InvokeAsync(new InvocationConfiguration { EnableDefaultExceptionHandler = false, ProcessTerminationTimeout = Moment, Output = surroundings.Output, Error = surroundings.Error }, cancellation);
         }
         catch (UsageException e)
         {

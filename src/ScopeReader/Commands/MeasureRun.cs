@@ -15,12 +15,16 @@ internal sealed record MeasureRun(Surroundings Surroundings, Plan Plan, string? 
     public async Task<int> Measure(string[] files, int jobs, IMeasureOutput output, CancellationToken cancellation)
     {
         Outcome worst = Outcome.Unjudged;
-        await foreach (MeasuredFile file in CaptureMeasurer.MeasureAll(files, f => CaptureMeasurer.Measure(f, Plan, Channel, cancellation), jobs, output.InOrder, cancellation))
+        using ProgressLine progress = Surroundings.Progress(cancellation);
+        await foreach (MeasuredFile file in CaptureMeasurer.MeasureAll(files, f => CaptureMeasurer.Measure(f, Plan, Channel, progress, cancellation), jobs, output.InOrder, cancellation))
         {
             worst = MeasuredFile.Worst(worst, file.Outcome);
-            if (file.Error is not null)
-                Surroundings.Error.WriteLine(SafeText.Of(file.Error));
-            output.Write(file);
+            progress.Aside(() =>
+            {
+                if (file.Error is not null)
+                    Surroundings.Error.WriteLine(SafeText.Of(file.Error));
+                output.Write(file);
+            });
         }
         output.Finish();
         Surroundings.Output.Flush();

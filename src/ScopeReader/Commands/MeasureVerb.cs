@@ -54,9 +54,13 @@ internal static class MeasureVerb
         return command;
     }
 
-    /// <summary>The files, none of them without a name.</summary>
-    public static string[] CheckedFiles(string[] files) =>
-        files.Any(f => f.Length == 0) ? throw new UsageException("a file's name is empty") : files;
+    /// <summary>The files, none of them without a name, and standard input at most once.</summary>
+    public static string[] CheckedFiles(string[] files)
+    {
+        if (files.Any(f => f.Length == 0))
+            throw new UsageException("a file's name is empty");
+        return files.Count(f => f == "-") > 1 ? throw new UsageException("standard input can be read once, and - is given more than once") : files;
+    }
 
     private static int Jobs(string? text)
     {

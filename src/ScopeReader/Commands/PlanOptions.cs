@@ -9,17 +9,17 @@ internal sealed class PlanOptions
 {
     private readonly Option<string?> _plan = Value("--plan", "FILE", "the plan: nominal, measuring chain, limits (TOML)");
     private readonly Option<string?> _nominal = Value("--nominal", "FREQUENCY", "nominal frequency, such as 455kHz; before the plan's");
-    private readonly Option<string?> _interval = Value("--interval", "TIME", "sample interval, such as 2ns, where the file states none");
-    private readonly Option<string?> _rate = Value("--rate", "FREQUENCY", "samples a second, such as 500MHz, in place of --interval");
 
     public Option<string?> Plan => _plan;
+
+    /// <summary>Those of them that say how files are read.</summary>
+    public ImportOptions Import { get; } = new();
 
     public void AddTo(Command command)
     {
         command.Options.Add(_plan);
         command.Options.Add(_nominal);
-        command.Options.Add(_interval);
-        command.Options.Add(_rate);
+        Import.AddTo(command);
     }
 
     /// <summary>The plan, with what the command line says in it.</summary>
@@ -32,14 +32,13 @@ internal sealed class PlanOptions
     /// <exception cref="PlanException">The plan is wrong or missing.</exception>
     public Plan Read(ParseResult parsed, DateOnly today, string? file)
     {
-        double? nominal = Positive(parsed, _nominal, "Hz"), interval = Positive(parsed, _interval, "s"), rate = Positive(parsed, _rate, "Hz");
-        if (interval is not null && rate is not null)
-            throw new UsageException("--interval and --rate say the same thing; keep one of them");
+        double? nominal = Positive(parsed, _nominal, "Hz");
+        ImportTable said = Import.Read(parsed);
         Plan plan = file is not null ? PlanReader.ReadFile(file) : ScopeReader.Plan.Empty;
         return plan with
         {
             Nominal = nominal ?? plan.Nominal,
-            Import = plan.Import with { Interval = interval ?? 1 / rate ?? plan.Import.Interval },
+            Import = said.Settings.Or(plan.Import),
             AsOf = today,
         };
     }

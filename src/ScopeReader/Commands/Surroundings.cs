@@ -13,6 +13,12 @@ internal sealed record Surroundings(TextWriter Output, TextWriter Error, Func<in
 {
     private const int UsualWidth = 80, NarrowestWidth = 20, WidestWidth = 1000;
 
+    /// <summary>True where somebody watches standard error: long work then shows how far it is.</summary>
+    public bool IsWatched { get; init; }
+
+    /// <summary>The line that shows how far the work is.</summary>
+    public ProgressLine Progress(CancellationToken cancellation) => new(IsWatched ? Error : null, TimeProvider.System, cancellation);
+
     /// <summary>The process's own.</summary>
     /// <remarks>
     /// Its own writers, and the width only when asked: the console's send the terminal a mode change as they are made,
@@ -24,7 +30,10 @@ internal sealed record Surroundings(TextWriter Output, TextWriter Error, Func<in
         bool modes = !redirected && Environment.GetEnvironmentVariable("TERM") is not "dumb";
         StreamWriter output = Writer(Console.OpenStandardOutput());
         return new Surroundings(output, Writer(Console.OpenStandardError()), Width,
-            modes && Environment.GetEnvironmentVariable("NO_COLOR") is null or "", DateOnly.FromDateTime(DateTime.Now));
+            modes && Environment.GetEnvironmentVariable("NO_COLOR") is null or "", DateOnly.FromDateTime(DateTime.Now))
+        {
+            IsWatched = !Console.IsErrorRedirected && Environment.GetEnvironmentVariable("TERM") is not "dumb",
+        };
 
         int Width()
         {

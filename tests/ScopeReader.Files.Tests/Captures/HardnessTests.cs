@@ -78,12 +78,12 @@ public class HardnessTests
 
     [Fact]
     public void Comma_that_may_be_a_decimal_mark_or_a_thousands_separator_is_refused_with_both_readings() => Assert.Equal(
-        "made.csv, line 1, column 1: expected to tell a decimal mark from a thousands separator, found \"1,234\": 1.234 or 1234. Give decimal = \",\" or decimal = \".\" under [import].",
+        "made.csv, line 1, column 1: expected to tell a decimal mark from a thousands separator, found \"1,234\": 1.234 or 1234. Give --decimal comma or --decimal point.",
         Import.Refusal("1,234;5,678\n2,345;6,789\n3,456;7,890\n").Message);
 
     [Fact]
     public void Comma_that_may_be_a_columns_end_or_a_decimal_mark_is_refused_with_both_readings() => Assert.Equal(
-        "made.csv, line 1: expected to tell a column's end from a decimal mark, found \"12,5\": two whole numbers, or one number with a decimal comma. Give delimiter = \",\" or decimal = \",\" under [import].",
+        "made.csv, line 1: expected to tell a column's end from a decimal mark, found \"12,5\": two whole numbers, or one number with a decimal comma. Give --delimiter comma or --decimal comma.",
         Import.Refusal("12,5\n17,25\n14,75\n9,5\n").Message);
 
     [Fact]
@@ -95,7 +95,7 @@ public class HardnessTests
 
     [Fact]
     public void Two_possible_axes_are_refused() => Assert.Equal(
-        "made.csv, line 2: expected one axis, found two: time in column 1 and frequency in column 2. Name the columns with columns = [\"time\", \"skip\", …] under [import].",
+        "made.csv, line 2: expected one axis, found two: time in column 1 and frequency in column 2. Give --columns with time or frequency for the axis and skip for the other.",
         Import.Refusal("time,frequency,level\n0.0,100,1\n0.1,200,2\n0.2,300,3\n0.3,400,4\n").Message);
 
     [Theory]

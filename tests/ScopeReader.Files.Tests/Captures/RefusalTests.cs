@@ -38,6 +38,6 @@ public class RefusalTests
     {
         ImportException refusal = Import.Refusal("time,CH1\n0,1\n1e-6,1\n2e-6,so\u0007so\n3e-6,1\n");
 
-        Assert.Equal("made.csv, line 4, column 2: expected a number, found \"so\uFFFDso\". Remove the line, or name its columns under [import].", refusal.Message);
+        Assert.Equal("made.csv, line 4, column 2: expected a number, found \"so\uFFFDso\". Remove the line, or leave the column out: --columns with skip in its place.", refusal.Message);
     }
 }

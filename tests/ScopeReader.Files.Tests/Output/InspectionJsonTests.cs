@@ -32,7 +32,7 @@ public class InspectionJsonTests
         JsonElement root = JsonDocument.Parse(json.Document()).RootElement, file = root.GetProperty("captures")[0], gone = root.GetProperty("captures")[1];
         Assert.Equal(["format", "version", "program", "captures"], Names(root));
         // "error" is ours: a field may be added.
-        Assert.Equal(["file", "error", "encoding", "delimiter", "decimalMark", "preambleLines", "headerRows", "axis", "channels", "doubts"], Names(file));
+        Assert.Equal(["file", "error", "encoding", "delimiter", "decimalMark", "preambleLines", "headerRows", "axis", "channels", "doubts", "remembered"], Names(file));
         Assert.Equal(Names(file), Names(gone));
         Assert.Equal(["source", "unit", "interval", "intervalLow", "intervalHigh", "worstDeviation"], Names(file.GetProperty("axis")));
         Assert.Equal(["name", "kind", "unit", "segment", "samples", "minimum", "maximum", "clipped", "missing"], Names(file.GetProperty("channels")[0]));

@@ -1,3 +1,4 @@
+using ScopeReader.Captures;
 using ScopeReader.Files.Structure;
 
 namespace ScopeReader.Files.Meaning;
@@ -37,6 +38,16 @@ internal sealed record Header(Label[] Labels, int FirstRow, int? NamesRow, int? 
             labels[i] = label;
         }
         return new Header(labels, namesRow ?? unitsRow ?? shape.First, namesRow, unitsRow);
+    }
+
+    /// <summary>The same with the units that the person gives, where they give some; what is written in the cells stays.</summary>
+    public Header Told(TableShape shape, ImportSettings settings)
+    {
+        Label[] labels = [.. Labels];
+        for (int i = 0; i < labels.Length; i++)
+            if (settings.Units is { } units && shape.Columns[i] < units.Count && shape.CellUnits[i] is null && Label.TryGiven(units[shape.Columns[i]], out double factor, out string unit))
+                labels[i] = labels[i] with { Unit = unit, Factor = factor };
+        return this with { Labels = labels };
     }
 
     // The nearest row above that says something: not blank, and not a line that only marks where the data begin.

@@ -1,3 +1,5 @@
+using ScopeReader.Readings;
+
 namespace ScopeReader.Files.Meaning;
 
 /// <summary>The label of a column: its name, and its unit where one is written with it.</summary>
@@ -28,6 +30,9 @@ internal readonly record struct Label(string Name, string? Unit, double Factor)
         }
         return new Label(cell, null, 1);
     }
+
+    /// <summary>Reads a unit that a person gives: what may be a name in a file is what they say it is.</summary>
+    public static bool TryGiven(string text, out double factor, out string unit) => UnitWords.TryRead(text, out factor, out unit) || Units.TryUnit(text, out factor, out unit);
 
     /// <summary>Reads a cell that should hold a unit alone: <c>V</c>, <c>(us)</c>, <c>second</c>.</summary>
     public static bool TryUnit(string cell, out double factor, out string unit)

@@ -88,7 +88,7 @@ internal static class Roles
         if (timed || x[^1] - x[0] < LeastFrequency)
             return ColumnRole.Time;
         throw new ImportException(file, FormattableString.Invariant($"expected an axis in s or Hz, found a first column without a name from {x[0]:G6} to {x[^1]:G6}: times or frequencies. ")
-            + "Give columns = [\"time\", …] or columns = [\"frequency\", …] under [import].", startLine + shape.First, 1);
+            + "Give --columns time or --columns frequency.", startLine + shape.First, 1);
     }
 
     // Beside an axis, a second column of times or frequencies is an axis of its own only if it rises evenly before more values.
@@ -103,7 +103,7 @@ internal static class Roles
             bool isAxis = leadsValues && x.Length >= 2 && (Rises(x) || Rises([.. x.Reverse()]));
             if (isAxis && i == axis + 1 && roles[i] != roles[axis])
                 throw new ImportException(file, $"expected one axis, found two: {Excerpt.Of(labels[axis].Name, 20)} in column {shape.Columns[axis] + 1} and {Excerpt.Of(labels[i].Name, 20)} in column {shape.Columns[i] + 1}. "
-                    + "Name the columns with columns = [\"time\", \"skip\", …] under [import].", startLine + shape.First);
+                    + "Give --columns with time or frequency for the axis and skip for the other.", startLine + shape.First);
             if (!isAxis)
                 roles[i] = i == axis + 1 && roles[i] == ColumnRole.Time && roles[axis] == ColumnRole.Time && leadsValues ? ColumnRole.Skip : ColumnRole.Value;
         }

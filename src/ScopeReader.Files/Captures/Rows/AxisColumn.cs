@@ -5,11 +5,14 @@ namespace ScopeReader.Files.Rows;
 /// <summary>The numbers of an axis column. While they are evenly spaced they are checked and let go of, unless all are wanted.</summary>
 internal sealed unsafe class AxisColumn(bool keepsAll)
 {
+    private const double Day = 86_400;
+
     private readonly SampleColumn _values = new(0), _halves = new(0);
     private readonly SpacingFit _fit = new();
     private Spacing? _passed;
     private PrintedDigits? _digits;
-    private double _widestHalf;
+    private double _widestHalf, _clock = double.NaN;
+    private int _days;
     private readonly bool _keepsAll = keepsAll;
     private bool _keeps = keepsAll;
 
@@ -40,8 +43,17 @@ internal sealed unsafe class AxisColumn(bool keepsAll)
     }
 
     /// <summary>Adds one.</summary>
-    public void Add(double value, double half)
+    /// <param name="value">As printed.</param>
+    /// <param name="half">Half of its last digit.</param>
+    /// <param name="isClock">True for a time of day: where it falls or rises by more than half a day, midnight has passed.</param>
+    public void Add(double value, double half, bool isClock)
     {
+        if (isClock)
+        {
+            _days += _clock - value > Day / 2 ? 1 : _clock - value < -Day / 2 ? -1 : 0;
+            _clock = value;
+            value += _days * Day;
+        }
         _values.Add(value);
         _halves.Add(half);
     }

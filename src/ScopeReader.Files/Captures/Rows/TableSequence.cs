@@ -22,7 +22,7 @@ internal sealed class TableSequence(TextWindow text, string file, ImportSettings
         shape ??= NewShape();
         if (shape is null)
             return _previous is null ? throw NoTable() : null;
-        Header header = Header.Read(shape);
+        Header header = Header.Read(shape).Told(shape, settings);
         Facts facts = Preamble.Read(shape, header);
         if (_previous is not null)
             facts.Inherit(_previous.Facts);

@@ -41,7 +41,7 @@ internal static class Ambiguity
         if (counts || isNamed || example is null)
             return;
         throw new ImportException(file, $"expected to tell a column's end from a decimal mark, found \"{Excerpt.Of(example, 20)}\": two whole numbers, or one number with a decimal comma. "
-            + "Give delimiter = \",\" or decimal = \",\" under [import].", startLine + shape.First);
+            + "Give --delimiter comma or --decimal comma.", startLine + shape.First);
     }
 
     // "1,234": one and a bit, or more than a thousand. Any other number of digits behind a comma settles it.
@@ -59,7 +59,7 @@ internal static class Ambiguity
             }
         if (example is { } found)
             throw new ImportException(file, $"expected to tell a decimal mark from a thousands separator, found \"{Excerpt.Of(found.Text, 20)}\": {found.Text.Replace(',', '.')} or {found.Text.Replace(",", "", StringComparison.Ordinal)}. "
-                + "Give decimal = \",\" or decimal = \".\" under [import].", startLine + found.Row, found.Column + 1);
+                + "Give --decimal comma or --decimal point.", startLine + found.Row, found.Column + 1);
     }
 
     private static bool IsWhole(string text, bool signed) =>

@@ -9,7 +9,8 @@ namespace ScopeReader.Files.Structure;
 /// <param name="Value">The number in <paramref name="Unit"/>; NaN where there is none.</param>
 /// <param name="Half">Half of the last printed digit, in the same unit.</param>
 /// <param name="Unit">The base unit written in the cell; null where none is.</param>
-internal readonly record struct Cell(CellKind Kind, double Value, double Half, string? Unit)
+/// <param name="IsClock">True where it is a time of day, s since midnight.</param>
+internal readonly record struct Cell(CellKind Kind, double Value, double Half, string? Unit, bool IsClock = false)
 {
     /// <summary>Values from here on stand for no number.</summary>
     // SCPI-99 7.2.1.4 and 7.2.1.5 (from memory): 9.9E37 is infinity and 9.91E37 is not a number.
@@ -37,7 +38,7 @@ internal readonly record struct Cell(CellKind Kind, double Value, double Half, s
         if (number > 0 && cell[^1] != mark)
         {
             if (cell.IndexOf((byte)':') > 0 && ClockTime.TryParse(cell, out double seconds, out double half))
-                return new Cell(CellKind.Number, seconds, half, "s");
+                return new Cell(CellKind.Number, seconds, half, "s", IsClock: true);
             if (GroupedNumber.TryParse(cell, mark, out value, out lastDigit))
                 return new Cell(CellKind.Number, value, NumberParser.HalfOf(lastDigit), null);
             if (NumberParser.TryParse(cell[..number], mark, out value, out lastDigit) && UnitWords.TryRead(Encoding.UTF8.GetString(cell[number..]), out double factor, out string unit))

@@ -5,11 +5,12 @@ namespace ScopeReader.Files.Text;
 
 /// <summary>Hashes the bytes as they are read, so that the hash is of what was parsed and not of a later state of the file.</summary>
 /// <remarks>Once a file proves long, the next block is read and hashed beside the parsing of this one.</remarks>
-internal sealed class HashingStream(Stream inner) : Stream
+internal sealed class HashingStream(Stream inner, IProgress<ImportProgress>? progress) : ForwardStream
 {
     private const int Block = 4 << 20, Long = 1 << 20;
 
     private readonly IncrementalHash _hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
+    private readonly long? _size = inner.CanSeek ? inner.Length : null;
     private byte[] _ahead = [];
     private int _aheadStart, _aheadEnd;
     private Task<int>? _running;
@@ -24,6 +25,7 @@ internal sealed class HashingStream(Stream inner) : Stream
     {
         int count = _running is null && _aheadStart == _aheadEnd ? ReadNow(buffer) : ReadAhead(buffer);
         Count += count;
+        progress?.Report(new ImportProgress(Count, _size));
         // Whoever waits at a terminal or a pipe must not be waited for when the work is stopped.
         if (Count >= Long && inner.CanSeek && _running is null && _aheadStart == _aheadEnd && count > 0)
             Start();
@@ -61,8 +63,6 @@ internal sealed class HashingStream(Stream inner) : Stream
         _running = Task.Run(() => ReadNow(_ahead));
     }
 
-    public override int Read(byte[] buffer, int offset, int count) => Read(buffer.AsSpan(offset, count));
-
     /// <summary>Hash of everything, lower-case hexadecimal; what nobody has read yet is read here.</summary>
     public string Finish()
     {
@@ -72,26 +72,6 @@ internal sealed class HashingStream(Stream inner) : Stream
         }
         return Convert.ToHexStringLower(_hash.GetHashAndReset());
     }
-
-    public override bool CanRead => true;
-
-    public override bool CanSeek => false;
-
-    public override bool CanWrite => false;
-
-    public override long Length => throw new NotSupportedException();
-
-    public override long Position { get => throw new NotSupportedException(); set => throw new NotSupportedException(); }
-
-    public override void Flush()
-    {
-    }
-
-    public override long Seek(long offset, SeekOrigin origin) => throw new NotSupportedException();
-
-    public override void SetLength(long value) => throw new NotSupportedException();
-
-    public override void Write(byte[] buffer, int offset, int count) => throw new NotSupportedException();
 
     protected override void Dispose(bool disposing)
     {

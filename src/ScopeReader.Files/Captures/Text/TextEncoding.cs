@@ -12,6 +12,9 @@ internal sealed record TextEncoding(string Name, Encoding? Encoding)
     private static readonly TextEncoding Utf16BigEndian = new("UTF-16 BE", new UnicodeEncoding(bigEndian: true, byteOrderMark: false));
     private static readonly TextEncoding Latin1 = new("Latin-1", Encoding.Latin1);
 
+    /// <summary>The names that a person may give, in their usual spelling.</summary>
+    public static IReadOnlyList<string> Names { get; } = ["utf-8", "utf-16", "utf-16be", "latin-1"];
+
     /// <summary>True where a character takes two bytes.</summary>
     public bool IsWide => Encoding is UnicodeEncoding;
 

@@ -21,11 +21,12 @@ internal sealed class Utf8Text : IDisposable
     /// <param name="stream">The file's bytes; disposed with this.</param>
     /// <param name="file">Its name, for messages.</param>
     /// <param name="encoding">The encoding's name, where the person gave one.</param>
+    /// <param name="progress">Who is told how far it is; null for nobody.</param>
     /// <exception cref="ImportException">Empty, binary, or an unknown encoding name.</exception>
-    public Utf8Text(Stream stream, string file, string? encoding)
+    public Utf8Text(Stream stream, string file, string? encoding, IProgress<ImportProgress>? progress)
     {
         long size = stream.CanSeek ? stream.Length : 0;
-        _hashing = new HashingStream(stream);
+        _hashing = new HashingStream(stream, progress);
         byte[] head = Sniff(_hashing);
         Stream bytes = new PrefixedStream(head, _hashing);
         string compressed = "";
@@ -42,7 +43,7 @@ internal sealed class Utf8Text : IDisposable
             throw new ImportException(file, "expected a table of numbers, found an empty file. Save the capture again.");
 
         TextEncoding found = encoding is null ? TextEncoding.Of(head) : TextEncoding.Named(encoding)
-            ?? throw new ImportException(file, $"expected an encoding of utf-8, utf-16, utf-16be or latin-1, found \"{Excerpt.Of(encoding)}\". Correct encoding under [import].");
+            ?? throw new ImportException(file, $"expected an encoding of {string.Join(", ", TextEncoding.Names)}, found \"{Excerpt.Of(encoding)}\". Correct --encoding, or encoding under [import].");
         if (!found.IsWide && IsBinary(head))
             throw new ImportException(file, "expected a table of numbers as text, found binary data. Export the capture as CSV.");
         (_isUtf8, _markLength) = (found.Encoding is null, found.MarkLength(head));

@@ -18,6 +18,7 @@ internal static class InspectionTable
             ["columns", $"between them: {SafeText.Of(report.Delimiter)}; decimal mark {SafeText.Of(report.DecimalMark)}"],
             ["lines", string.Create(CultureInfo.InvariantCulture, $"{report.PreambleLines} of preamble, {report.HeaderRows} of header, numbers from line {report.FirstLine}")],
             ["axis", Axis(report.Axis)],
+            .. report.Remembered.Count > 0 ? (string[][])[["folder", SafeText.Of($"{FolderMemory.FileName} says: {string.Join("; ", report.Remembered)}")]] : [],
         ]);
         sheet.Heading("Channels");
         foreach (ChannelReport channel in report.Channels)

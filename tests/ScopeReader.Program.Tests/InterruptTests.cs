@@ -1,0 +1,91 @@
+using System.Diagnostics;
+using System.Globalization;
+using System.Text;
+
+namespace ScopeReader.Program.Tests;
+
+/// <summary>Ctrl-C while a file is read: the program ends with 130, and soon.</summary>
+public sealed class InterruptTests : IDisposable
+{
+    // Far more than the half second that it takes; less than anybody would wait.
+    private static readonly TimeSpan s_soon = TimeSpan.FromSeconds(20);
+
+    private readonly string _folder = Directory.CreateTempSubdirectory("scopereader-tests-").FullName;
+
+    public void Dispose() => Directory.Delete(_folder, recursive: true);
+
+    [Fact]
+    public async Task A_pipe_that_nobody_writes_to_any_more()
+    {
+        if (OperatingSystem.IsWindows())
+            return; // Ctrl-C is no signal there.
+        using Process program = BuiltProgram.Start(80, "measure", "-");
+        await program.StandardInput.WriteAsync("t,u\ns,V\n0.0,1\n0.1,2\n");
+        await program.StandardInput.FlushAsync();
+        await Running(program);
+
+        Assert.Equal((130, "", ""), await Interrupted(program));
+    }
+
+    [Fact]
+    public async Task A_pipe_that_goes_on_for_ever()
+    {
+        if (OperatingSystem.IsWindows())
+            return;
+        using Process program = BuiltProgram.Start(80, "inspect", "-");
+        using var stop = new CancellationTokenSource();
+        Task writing = Task.Run(async () =>
+        {
+            byte[] rows = Encoding.UTF8.GetBytes(string.Concat(Enumerable.Repeat("0.5\n1.5\n2.5\n1.25\n", 4000)));
+            while (!stop.IsCancellationRequested)
+                await program.StandardInput.BaseStream.WriteAsync(rows, stop.Token);
+        });
+        await Running(program);
+
+        Assert.Equal((130, "", ""), await Interrupted(program));
+        await stop.CancelAsync();
+        // Whichever comes first: the end of the pipe or that of the writing.
+        await Assert.ThrowsAnyAsync<Exception>(() => writing);
+    }
+
+    [Fact]
+    public async Task A_large_file()
+    {
+        if (OperatingSystem.IsWindows())
+            return;
+        // Words in the cells keep it on the slow way: reading it takes many seconds.
+        string path = Path.Combine(_folder, "large.csv");
+        using (var file = new StreamWriter(path))
+            for (int block = 0; block < 400; block++)
+                file.Write(string.Concat(Enumerable.Range(block * 5000, 5000).Select(i => string.Create(CultureInfo.InvariantCulture, $"{i}us,\"{i % 17}.5 mV\"\n"))));
+        using Process program = BuiltProgram.Start(80, "inspect", path);
+        await Running(program);
+
+        Assert.Equal((130, "", ""), await Interrupted(program));
+    }
+
+    // The program listens to signals once it has begun to work; there is no sign of that to wait for but its threads.
+    private static async Task Running(Process program)
+    {
+        await Task.Delay(TimeSpan.FromSeconds(1.5));
+        Assert.False(program.HasExited);
+    }
+
+    private static async Task<(int Status, string Output, string Error)> Interrupted(Process program)
+    {
+        Task<string> output = program.StandardOutput.ReadToEndAsync(), error = program.StandardError.ReadToEndAsync();
+        using (Process kill = Process.Start("kill", ["-INT", program.Id.ToString(CultureInfo.InvariantCulture)]))
+            await kill.WaitForExitAsync();
+        using var limit = new CancellationTokenSource(s_soon);
+        try
+        {
+            await program.WaitForExitAsync(limit.Token);
+        }
+        catch (OperationCanceledException)
+        {
+            program.Kill();
+            throw;
+        }
+        return (program.ExitCode, await output, await error);
+    }
+}
