@@ -6,7 +6,7 @@ namespace ScopeReader.Readings;
 public static class Engineering
 {
     private const string Prefixes = "qryzafpnµm kMGTPEZYRQ";
-    private const int BasePrefix = 10;
+    private const int BasePrefix = 10, MostDecimals = 15;
 
     /// <summary>A value in its own right, to a number of significant digits: "38.2 MHz".</summary>
     /// <param name="value">In <paramref name="unit"/>.</param>
@@ -18,6 +18,8 @@ public static class Engineering
             return Join("0", "", unit);
         int power = PowerOf(value, unit, digits);
         double scaled = Scale(value, power);
+        if (!IsPlain(Magnitude(scaled, digits), unit))
+            return Join(Exponential(value, digits), "", unit);
         return Join(Fixed(scaled, digits - 1 - Magnitude(scaled, digits)), Prefix(power), unit);
     }
 
@@ -30,7 +32,9 @@ public static class Engineering
         string text = Format(value, unit, digits);
         int space = text.IndexOf(' ');
         (string number, string rest) = space < 0 ? (text, "") : (text[..space], text[space..]);
-        return (number.Contains('.') ? number.TrimEnd('0').TrimEnd('.') : number) + rest;
+        int power = number.IndexOf('e');
+        (number, string exponent) = power < 0 ? (number, "") : (number[..power], number[power..]);
+        return (number.Contains('.') ? number.TrimEnd('0').TrimEnd('.') : number) + exponent + rest;
     }
 
     /// <summary>A value and its expanded uncertainty, two digits of it, in one unit: "38.20 MHz ± 0.40 MHz".</summary>
@@ -50,12 +54,28 @@ public static class Engineering
         {
             int own = value == 0 ? 0 : PowerOf(value, unit, 6);
             double alone = Scale(value, own);
+            if (value != 0 && !IsPlain(Magnitude(alone, 6), unit))
+                return (Exponential(value, 6), "", unit);
             return (value == 0 ? "0" : Fixed(alone, 5 - Magnitude(alone, 6)), "", Prefix(own) + unit);
         }
         int power = PowerOf(Math.Max(Math.Abs(value), uncertainty), unit, 15);
         double spread = Scale(uncertainty, power);
         int decimals = 1 - Magnitude(spread, 2);
+        // As many digits of the value as reach down to the last of the uncertainty.
+        int digits = value == 0 ? 1 : Math.Clamp(Magnitude(Scale(value, power), 15) + decimals + 1, 1, 15);
+        if (decimals > MostDecimals || !IsPlain(Magnitude(Math.Max(Math.Abs(Scale(value, power)), spread), 2), unit))
+            return (Exponential(value, digits), Exponential(uncertainty, 2), unit);
         return (Fixed(Scale(value, power), decimals), Fixed(spread, decimals), Prefix(power) + unit);
+    }
+
+    // Beyond the prefixes, and without any, a number's size hides behind zeros, or its digits do.
+    private static bool IsPlain(int magnitude, string unit) => TakesPrefix(unit) ? magnitude is >= -3 and < 6 : magnitude is > 3 - MostDecimals and < MostDecimals;
+
+    private static string Exponential(double value, int digits)
+    {
+        string text = value.ToString("E" + (digits - 1), CultureInfo.InvariantCulture);
+        int at = text.IndexOf('E');
+        return $"{text[..at]}e{int.Parse(text.AsSpan(at + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture)}";
     }
 
     private static string Prefix(int power) => power == 0 ? "" : Prefixes[power + BasePrefix].ToString();
@@ -64,12 +84,11 @@ public static class Engineering
         prefix.Length + unit.Length == 0 || unit == "1" ? number + prefix : $"{number} {prefix}{unit}";
 
     // Powers of a thousand. Ratios, decibels and plain numbers take no prefix.
-    private static int PowerOf(double value, string unit, int digits)
-    {
-        if (unit is "" or "1" or "%" or "ppm" or "bit" or "sample" or "1/sample" or "°C" || unit.StartsWith("dB", StringComparison.Ordinal) || unit.StartsWith("ppm", StringComparison.Ordinal))
-            return 0;
-        return Math.Clamp((int)Math.Floor(Magnitude(value, digits) / 3.0), -BasePrefix, Prefixes.Length - 1 - BasePrefix);
-    }
+    private static int PowerOf(double value, string unit, int digits) =>
+        TakesPrefix(unit) ? Math.Clamp((int)Math.Floor(Magnitude(value, digits) / 3.0), -BasePrefix, Prefixes.Length - 1 - BasePrefix) : 0;
+
+    private static bool TakesPrefix(string unit) =>
+        !(unit is "" or "1" or "%" or "ppm" or "bit" or "sample" or "1/sample" or "°C" || unit.StartsWith("dB", StringComparison.Ordinal) || unit.StartsWith("ppm", StringComparison.Ordinal));
 
     // The decimal exponent after rounding to the digits: 999.96 to four digits is 1.000e3.
     private static int Magnitude(double value, int digits)
@@ -83,7 +102,7 @@ public static class Engineering
     private static string Fixed(double value, int decimals)
     {
         if (decimals >= 0)
-            return WithoutNegativeZero(value.ToString("F" + Math.Min(decimals, 15), CultureInfo.InvariantCulture));
+            return WithoutNegativeZero(value.ToString("F" + Math.Min(decimals, MostDecimals), CultureInfo.InvariantCulture));
         // Digits left of the point that the uncertainty does not support read as zeros.
         double step = Math.Pow(10, -decimals);
         return WithoutNegativeZero((Math.Round(value / step) * step).ToString("F0", CultureInfo.InvariantCulture));

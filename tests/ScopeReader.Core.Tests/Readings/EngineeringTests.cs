@@ -18,6 +18,8 @@ public class EngineeringTests
     [InlineData(-9.5424, 0.0123, "dBc", "-9.542 dBc ± 0.012 dBc")]
     [InlineData(0.1042, 0.00057, "1", "0.10420 ± 0.00057")]
     [InlineData(999.9996e3, 0.5, "Hz", "999.99960 kHz ± 0.00050 kHz")]
+    [InlineData(1.25e57, 3e55, "V", "1.250e57 V ± 3.0e55 V")]
+    [InlineData(3.1e-18, 2e-20, "1", "3.100e-18 ± 2.0e-20")]
     public void Uncertainty_has_two_digits_and_the_value_matches(double value, double uncertainty, string unit, string expected) =>
         Assert.Equal(expected, Engineering.Format(value, uncertainty, unit));
 
@@ -27,6 +29,10 @@ public class EngineeringTests
     [InlineData(0, "V", 4, "0 V")]
     [InlineData(-0.0151, "V", 2, "-15 mV")]
     [InlineData(5, "1", 2, "5.0")]
+    [InlineData(1e57, "V", 4, "1.000e57 V")]
+    [InlineData(-2.5e-40, "A", 2, "-2.5e-40 A")]
+    [InlineData(6.02e23, "", 3, "6.02e23")]
+    [InlineData(4.5e-13, "1", 2, "4.5e-13")]
     public void A_value_alone_has_the_digits_asked_for(double value, string unit, int digits, string expected) =>
         Assert.Equal(expected, Engineering.Format(value, unit, digits));
 
@@ -36,6 +42,7 @@ public class EngineeringTests
     [InlineData(0, "V", "0 V")]
     [InlineData(-50, "ppm", "-50 ppm")]
     [InlineData(1e-8, "s", "10 ns")]
+    [InlineData(1e50, "V", "1e50 V")]
     public void A_given_value_has_no_idle_zeros(double value, string unit, string expected) =>
         Assert.Equal(expected, Engineering.Given(value, unit));
 }
