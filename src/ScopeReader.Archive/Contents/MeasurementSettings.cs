@@ -18,6 +18,9 @@ public sealed record MeasurementSettings
     /// <summary>Number of the segment that was measured.</summary>
     public int? Segment { get; init; }
 
+    /// <summary>The [import] table that the capture was read with, TOML: the plan's, the command line's and the folder's together.</summary>
+    public string? HowRead { get; init; }
+
     /// <summary>The day that ageing was counted to.</summary>
     public DateOnly? AsOf { get; init; }
 }

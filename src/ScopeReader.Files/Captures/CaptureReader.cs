@@ -1,4 +1,5 @@
 using ScopeReader.Captures;
+using ScopeReader.Files.Plans;
 
 namespace ScopeReader.Files;
 
@@ -54,10 +55,23 @@ public static class CaptureReader
     /// <param name="cancellation">Stops the work.</param>
     /// <exception cref="ImportException">The stream cannot be read or is no capture.</exception>
     /// <exception cref="OperationCanceledException">The work was stopped.</exception>
-    public static CaptureFile Read(Stream stream, string file, ImportSettings settings, double scale = 1, CancellationToken cancellation = default)
+    public static CaptureFile Read(Stream stream, string file, ImportSettings settings, double scale = 1, CancellationToken cancellation = default) =>
+        Read(stream, file, settings, ImportTable.Empty, scale, cancellation);
+
+    /// <summary>Reads a stream to its end and closes it, with what the folder remembers that its bytes come from.</summary>
+    /// <param name="stream">The file's bytes.</param>
+    /// <param name="file">Its name, for messages and the capture.</param>
+    /// <param name="settings">What the person says about it.</param>
+    /// <param name="memory">What counts where they say nothing.</param>
+    /// <param name="scale">Multiplies the values.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    /// <exception cref="ImportException">The stream cannot be read or is no capture.</exception>
+    /// <exception cref="OperationCanceledException">The work was stopped.</exception>
+    public static CaptureFile Read(Stream stream, string file, ImportSettings settings, ImportTable memory, double scale, CancellationToken cancellation)
     {
         ArgumentNullException.ThrowIfNull(stream);
         ArgumentNullException.ThrowIfNull(settings);
-        return new ImportJob(file, settings, scale) { Cancellation = cancellation }.Read(stream);
+        ArgumentNullException.ThrowIfNull(memory);
+        return new ImportJob(file, settings, scale) { Memory = memory, Cancellation = cancellation }.Read(stream);
     }
 }

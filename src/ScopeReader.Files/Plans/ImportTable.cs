@@ -1,3 +1,4 @@
+using System.Globalization;
 using ScopeReader.Captures;
 
 namespace ScopeReader.Files.Plans;
@@ -32,6 +33,29 @@ public sealed record ImportTable(ImportSettings Settings, IReadOnlyList<ImportEn
             }
         }
         return new ImportTable(plan.Import, entries);
+    }
+
+    /// <summary>Settings as an [import] table's text; null where they say nothing.</summary>
+    public static string? TextOf(ImportSettings settings)
+    {
+        ArgumentNullException.ThrowIfNull(settings);
+        var lines = new List<string>();
+        Add("delimiter", settings.Delimiter is { } delimiter ? ImportEntry.Quoted(delimiter.ToString()) : null);
+        Add("decimal", settings.DecimalMark is { } mark ? ImportEntry.Quoted(mark.ToString()) : null);
+        Add("first-line", settings.FirstLine?.ToString(CultureInfo.InvariantCulture));
+        Add("encoding", settings.Encoding is { } encoding ? ImportEntry.Quoted(encoding) : null);
+        Add("interval", settings.Interval is { } interval ? ImportEntry.Quoted(interval.ToString("R", CultureInfo.InvariantCulture) + " s") : null);
+        Add("columns", settings.Columns is { } columns ? ImportEntry.List(columns) : null);
+        Add("units", settings.Units is { } units ? ImportEntry.List(units) : null);
+        Add("segment", settings.Segment?.ToString(CultureInfo.InvariantCulture));
+        Add("factor", settings.Factor is { } factor ? ImportEntry.Quoted(factor.ToString("R", CultureInfo.InvariantCulture)) : null);
+        return lines.Count == 0 ? null : $"[{PlanKeyList.Import}]\n{string.Join('\n', lines)}\n";
+
+        void Add(string key, string? value)
+        {
+            if (value is not null)
+                lines.Add($"{key} = {value}");
+        }
     }
 
     private static string Found(PlanSection section) => section.Name == PlanDocument.Top ? $"{section.Entries[0].Key} above it" : section.IsList ? $"[[{section.Name}]]" : $"[{section.Name}]";

@@ -3,6 +3,7 @@ using System.Runtime.CompilerServices;
 using ScopeReader.Captures;
 using ScopeReader.Files;
 using ScopeReader.Files.Output;
+using ScopeReader.Files.Plans;
 
 namespace ScopeReader.Commands;
 
@@ -33,13 +34,14 @@ internal static class CaptureMeasurer
     /// <param name="bytes">A file's bytes.</param>
     /// <param name="file">Its name.</param>
     /// <param name="plan">The plan, with what the command line says in it.</param>
+    /// <param name="memory">What the file's folder remembers.</param>
     /// <param name="channel">Measure only this channel; null for all.</param>
     /// <param name="cancellation">Stops the work.</param>
     /// <returns>The measurement, and how the bytes were read.</returns>
     /// <exception cref="ImportException">They are no capture.</exception>
-    public static (Measurement Measurement, ImportReport Report) Measure(byte[] bytes, string file, Plan plan, string? channel, CancellationToken cancellation)
+    public static (Measurement Measurement, ImportReport Report) Measure(byte[] bytes, string file, Plan plan, ImportTable memory, string? channel, CancellationToken cancellation)
     {
-        CaptureFile read = CaptureReader.Read(new MemoryStream(bytes, writable: false), file, plan.Import, plan.Chain.Scale, cancellation);
+        CaptureFile read = CaptureReader.Read(new MemoryStream(bytes, writable: false), file, plan.Import, memory, plan.Chain.Scale, cancellation);
         return (Analysis.Measure(Chosen(read.Capture, file, plan, channel), plan, null, cancellation), read.Report);
     }
 

@@ -123,6 +123,17 @@ public sealed class ImportOptionTests : IDisposable
         Assert.Equal((3, false), (status, File.Exists(Memory)));
     }
 
+    [Fact]
+    public async Task A_kept_capture_is_measured_again_as_it_was_read()
+    {
+        string file = Write("i.csv", Unclear), archive = Path.Combine(_folder, "a.db");
+        Write(".scopereader.toml", "[import]\ndecimal = \"comma\"\n");
+        Assert.Equal(0, (await Run.Program("measure", file, "--keep", "--archive", archive, "--factor", "2", "--rate", "1 MHz")).Status);
+
+        (int status, string output, string error) = await Run.Program("archive", "remeasure", "1", "--archive", archive);
+        Assert.Equal((0, "entry 1, i.csv: nothing changed, unjudged\n", ""), (status, output, error));
+    }
+
     [Theory]
     [InlineData("--remember keeps what the command line says about the files, such as --decimal comma, and it says nothing", "a.csv")]
     [InlineData("--remember keeps it in the file's folder, and standard input has none", "-", "--decimal", "comma")]

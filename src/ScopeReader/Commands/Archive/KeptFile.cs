@@ -3,6 +3,7 @@ using ScopeReader.Archive;
 using ScopeReader.Archive.Contents;
 using ScopeReader.Files;
 using ScopeReader.Files.Output;
+using ScopeReader.Files.Plans;
 
 namespace ScopeReader.Commands.Archive;
 
@@ -33,7 +34,9 @@ internal sealed record KeptFile(string Name, byte[] Bytes, DateTimeOffset Date, 
             (bytes, date) = ReadFile(file);
         }
         string name = file == "-" ? "standard input" : file;
-        (Measurement measurement, ImportReport report) = CaptureMeasurer.Measure(bytes, name, plan, channel, cancellation);
+        ImportTable memory = file == "-" ? ImportTable.Empty : FolderMemory.For(file);
+        (Measurement measurement, ImportReport report) = CaptureMeasurer.Measure(bytes, name, plan, memory, channel, cancellation);
+        plan = plan with { Import = plan.Import.Or(memory.Settings) };
         return new KeptFile(name, bytes, date, plan, measurement, ContextOf(plan, planText, channel, report));
     }
 
@@ -47,7 +50,7 @@ internal sealed record KeptFile(string Name, byte[] Bytes, DateTimeOffset Date, 
         {
             Program = CommandLine.ProgramAndVersion,
             PlanText = planText,
-            Settings = new MeasurementSettings { Nominal = plan.Nominal, Channel = channel, Interval = plan.Import.Interval, Segment = plan.Import.Segment, AsOf = plan.AsOf },
+            Settings = new MeasurementSettings { Nominal = plan.Nominal, Channel = channel, Interval = plan.Import.Interval, Segment = plan.Import.Segment, HowRead = ImportTable.TextOf(plan.Import), AsOf = plan.AsOf },
             Chain = plan.Chain,
             Import = document.RootElement.GetProperty("captures")[0].Clone(),
         };

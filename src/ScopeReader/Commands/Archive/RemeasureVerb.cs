@@ -3,6 +3,7 @@ using System.Globalization;
 using ScopeReader.Archive;
 using ScopeReader.Archive.Contents;
 using ScopeReader.Archive.Search;
+using ScopeReader.Captures;
 using ScopeReader.Commands.Tables;
 using ScopeReader.Files;
 using ScopeReader.Files.Plans;
@@ -64,10 +65,14 @@ internal static class RemeasureVerb
         MeasurementContent before = entry.Measurement;
         MeasurementSettings settings = before.Settings;
         Plan plan = before.Plan is { } text ? PlanReader.Parse(text, $"the plan of entry {entry.Number.ToString(CultureInfo.InvariantCulture)}") : Plan.Empty;
-        plan = plan with { Nominal = settings.Nominal, AsOf = settings.AsOf, Import = plan.Import with { Interval = settings.Interval, Segment = settings.Segment } };
-        (Measurement measurement, ImportReport report) = CaptureMeasurer.Measure(bytes, entry.File, plan, settings.Channel, cancellation);
+        plan = plan with { Nominal = settings.Nominal, AsOf = settings.AsOf, Import = HowRead(settings, plan) };
+        (Measurement measurement, ImportReport report) = CaptureMeasurer.Measure(bytes, entry.File, plan, ImportTable.Empty, settings.Channel, cancellation);
         return (measurement, KeptFile.ContextOf(plan, before.Plan, settings.Channel, report));
     }
+
+    // Entries of earlier versions have two of the settings alone.
+    private static ImportSettings HowRead(MeasurementSettings settings, Plan plan) => settings.HowRead is { } table ? ImportTable.Parse(table, "how it was read").Settings
+        : plan.Import with { Interval = settings.Interval, Segment = settings.Segment };
 
     private static void Report(Entry entry, MeasurementContent now, TextWriter output)
     {
