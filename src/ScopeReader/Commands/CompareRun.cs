@@ -29,7 +29,9 @@ internal sealed record CompareRun(Surroundings Surroundings, Plan Plan, Plan? Ot
     /// <returns>The exit status.</returns>
     public int Compare(string[][] sides, CompareForm form, CancellationToken cancellation)
     {
-        MeasuredFile[][] measured = [.. sides.Select((side, i) => side.Select(f => CaptureMeasurer.Measure(f, i == 0 ? Plan : OtherPlan ?? Plan, Channel, cancellation)).ToArray())];
+        using ProgressLine progress = Surroundings.Progress(cancellation);
+        MeasuredFile[][] measured = [.. sides.Select((side, i) => side.Select(f => CaptureMeasurer.Measure(f, i == 0 ? Plan : OtherPlan ?? Plan, Channel, progress, cancellation)).ToArray())];
+        progress.Hide();
         MeasuredFile[] all = [.. measured.SelectMany(side => side)];
         Outcome worst = Outcome.Unjudged;
         foreach (MeasuredFile file in all)

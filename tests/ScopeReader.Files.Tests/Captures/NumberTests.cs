@@ -40,6 +40,28 @@ public class NumberTests
         }, iter: 60);
 
     [Theory]
+    [InlineData("{0},{1}\n", '.')]
+    [InlineData("{0},{1},\r\n", '.')]
+    [InlineData("{0};{1}\n", ',')]
+    [InlineData("{0}\t{1}\n", '.')]
+    [InlineData("  {0}   {1}  \n", '.')]
+    [InlineData("{0} \t {1}\n", ',')]
+    [InlineData("\"{0}\",\"{1}\"\n", '.')]
+    [InlineData("{0}V,{1} V\n", '.')]
+    [InlineData("{0},V,{1}, V\n", '.')]
+    [InlineData("{0};{1};a note;\n", ',')]
+    public void Numbers_between_and_behind_anything_are_the_same_bits_too(string row, char mark) =>
+        // Stretches of one format each, as instruments print them, so that the layout of one number serves the next.
+        Gen.Select(s_printed.Array[1, 30], OneOf("E9", "E3", "G6", "F3", "+0.00E+00;-0.00E+00", "E17", "0"), Gen.Double[-1, 1].Array[40, 400], Gen.Int[-9, 9]).Array[1, 4].Sample(stretches =>
+        {
+            string[] texts = [.. stretches.SelectMany(s => s.Item1.Concat(s.Item3.Select(v => (v * Math.Pow(10, s.Item4)).ToString(s.Item2, CultureInfo.InvariantCulture))))];
+            string file = "a b" + row[(row.IndexOf('}') + 1)..row.IndexOf("{1}", StringComparison.Ordinal)] + "c\n" + string.Concat(texts.Select(t => string.Format(CultureInfo.InvariantCulture, row, t.Replace('.', mark), t.Replace('.', mark))));
+            CaptureFile read = Import.Text(file, s_timed with { DecimalMark = mark, FirstLine = 2, Columns = ["a", "b", "c"] });
+            double[] expected = [.. texts.Select(t => double.Parse(t, CultureInfo.InvariantCulture))];
+            return Same(expected, read.Waveform(0).Samples) && Same(expected, read.Waveform(1).Samples);
+        }, iter: 20);
+
+    [Theory]
     [InlineData("1.7976931348623157e308")]
     [InlineData("9007199254740993")]
     [InlineData("123456789012345678901234567890e-40")]

@@ -3,10 +3,12 @@ using ScopeReader.Files;
 
 namespace ScopeReader.Tests.Commands;
 
-public class ProgressLineTests
+public sealed class ProgressLineTests : IDisposable
 {
     private readonly StringWriter _terminal = new();
     private readonly Clock _clock = new();
+
+    public void Dispose() => _terminal.Dispose();
 
     private ProgressLine Line(CancellationToken cancellation = default) => new(_terminal, _clock, cancellation);
 

@@ -1,5 +1,4 @@
 using System.Text;
-using ScopeReader.Captures;
 using ScopeReader.Files.Plans;
 
 namespace ScopeReader.Files;

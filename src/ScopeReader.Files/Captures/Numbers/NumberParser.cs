@@ -4,7 +4,8 @@ namespace ScopeReader.Files.Numbers;
 
 /// <summary>Numbers as instruments print them, correctly rounded: the same bits as <see cref="double.Parse(string)"/>.</summary>
 /// <remarks>Up to 2^53 of digits and a power of ten up to 22 are both exact doubles, so that one multiplication or division
-/// rounds once (Clinger 1990). Everything else goes the long way.</remarks>
+/// rounds once (Clinger 1990). Up to 19 digits take a multiplication of 128 bits (<see cref="ExactProduct"/>); everything else
+/// goes the long way.</remarks>
 internal static class NumberParser
 {
     /// <summary>The longest number that is read, in bytes.</summary>
@@ -12,6 +13,9 @@ internal static class NumberParser
 
     /// <summary>The highest power of ten that is an exact double.</summary>
     public const int ExactPower = 22;
+
+    /// <summary>So many digits fit into 64 bits, whatever they are.</summary>
+    public const int MostDigits = 19;
 
     /// <summary>Whole numbers up to this are exact doubles.</summary>
     public const ulong ExactDigits = 1UL << 53;
@@ -63,11 +67,25 @@ internal static class NumberParser
             return false;
 
         lastDigit = exponent;
-        if (digits > 19 || significand > ExactDigits || exponent is < -ExactPower or > ExactPower)
+        if (!TryRound(significand, digits, exponent, out double exact))
             return Slow(cell, mark, out value);
-        double exact = significand;
-        exact = exponent < 0 ? exact / Powers[-exponent] : exact * Powers[exponent];
         value = negative ? -exact : exact;
+        return true;
+    }
+
+    /// <summary>Rounds a significand times a power of ten; false where only the long way can.</summary>
+    /// <param name="significand">The digits as a whole number; any value where there are more than 19.</param>
+    /// <param name="digits">How many there are.</param>
+    /// <param name="exponent">The power of ten.</param>
+    /// <param name="value">The nearest double.</param>
+    public static bool TryRound(ulong significand, int digits, int exponent, out double value)
+    {
+        value = significand;
+        if (digits > MostDigits)
+            return false;
+        if (significand > ExactDigits || exponent is < -ExactPower or > ExactPower)
+            return ExactProduct.TryRound(significand, exponent, out value);
+        value = exponent < 0 ? value / Powers[-exponent] : value * Powers[exponent];
         return true;
     }
 

@@ -8,12 +8,10 @@ internal static unsafe class PlainNumber
     /// <summary>Reads the number at a place; eight bytes behind its end may be looked at.</summary>
     /// <param name="p">Where it begins.</param>
     /// <param name="mark">The decimal mark.</param>
-    /// <param name="powers">The exact powers of ten.</param>
     /// <param name="value">The number, correctly rounded.</param>
     /// <param name="lastDigit">Decimal exponent of its last printed digit.</param>
     /// <returns>The place behind it, or null where there is no number or one that stands for none.</returns>
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static byte* Read(byte* p, byte mark, double* powers, out double value, out int lastDigit)
+    public static byte* Read(byte* p, byte mark, out double value, out int lastDigit)
     {
         byte* start = p;
         bool negative = *p == '-';
@@ -31,12 +29,8 @@ internal static unsafe class PlainNumber
         if (*p == mark)
         {
             byte* fraction = ++p;
-            ulong eight = Unsafe.ReadUnaligned<ulong>(p);
-            if (AreDigits(eight))
-            {
+            for (ulong eight; AreDigits(eight = Unsafe.ReadUnaligned<ulong>(p)); p += 8)
                 significand = significand * 100_000_000 + EightDigits(eight);
-                p += 8;
-            }
             while ((digit = (uint)(*p - '0')) <= 9)
             {
                 significand = significand * 10 + digit;
@@ -64,11 +58,9 @@ internal static unsafe class PlainNumber
             exponent += below ? -power : power;
         }
         lastDigit = exponent;
-        if ((uint)(digits - 1) < 19 && significand <= NumberParser.ExactDigits && (uint)(exponent + NumberParser.ExactPower) <= 2 * NumberParser.ExactPower)
+        if (digits > 0 && NumberParser.TryRound(significand, digits, exponent, out double rounded) && rounded < Structure.Cell.Infinity)
         {
-            double exact = significand;
-            exact = exponent < 0 ? exact / powers[-exponent] : exact * powers[exponent];
-            value = negative ? -exact : exact;
+            value = negative ? -rounded : rounded;
             return p;
         }
         return Slow(start, p, digits, mark, out value);

@@ -1,35 +1,26 @@
-using ScopeReader.Files.Numbers;
-using ScopeReader.Files.Structure;
 using ScopeReader.Files.Text;
 
 namespace ScopeReader.Files.Rows;
 
 /// <summary>The quick way through rows of nothing but numbers; any other row stops it and is read the long way.</summary>
-/// <remarks>One pass over the bytes: a number's end is found as its digits are read. The text is split at line ends over the
-/// cores; each part writes behind the rows that the parts before it have lines for.</remarks>
+/// <remarks>The text is split at line ends over the cores; each part writes behind the rows that the parts before it have lines
+/// for, so that the result is the same for any number of them.</remarks>
 internal sealed unsafe class PlainRows
 {
     private const int SmallestPart = 1 << 17, MostParts = 4;
 
     private readonly Table _table;
-    private readonly byte _delimiter, _mark;
-    private readonly int[] _columnOfCell;
+    private readonly PlainCell[] _cells;
+    private readonly PlainRowParser _parser;
+    private int _reach = int.MaxValue;
 
-    private PlainRows(Table table)
-    {
-        _table = table;
-        (_delimiter, _mark) = ((byte)table.Shape.Delimiter, (byte)table.Shape.Mark);
-        _columnOfCell = new int[table.Shape.Columns[^1] + 1];
-        for (int c = 0; c < _columnOfCell.Length; c++)
-        {
-            int column = Array.IndexOf(table.Shape.Columns, c);
-            _columnOfCell[c] = column >= 0 && (table.Samples[column] is not null || table.Axes[column] is not null) ? column : -1;
-        }
-    }
+    private PlainRows(Table table, PlainCell[] cells) => (_table, _cells, _parser) = (table, cells, new PlainRowParser(table.Shape, cells.Length));
+
+    /// <summary>True where the last call was stopped by a row that is not plain.</summary>
+    public bool IsStopped { get; private set; }
 
     /// <summary>The quick way for a table; null where its rows are of another kind.</summary>
-    public static PlainRows? For(Table table) =>
-        table.Shape.UnitColumns.All(u => u < 0) && table.Shape.CellUnits.All(u => u is null) && table.Shape.Delimiter < 128 ? new PlainRows(table) : null;
+    public static PlainRows? For(Table table) => table.Shape.Delimiter < 128 && PlainCell.Of(table) is { } cells ? new PlainRows(table, cells) : null;
 
     /// <summary>Reads rows until one is not plain.</summary>
     /// <param name="lines">Whole lines, with <see cref="TextWindow.Slack"/> bytes more behind them that may be looked at.</param>
@@ -37,6 +28,9 @@ internal sealed unsafe class PlainRows
     /// <returns>How many bytes were read.</returns>
     public int Read(ReadOnlySpan<byte> lines, out int rows)
     {
+        // Where rows of another kind are frequent, what lies behind the next of them would be read in vain.
+        if (lines.Length > _reach)
+            lines = lines[..(lines[.._reach].LastIndexOf((byte)'\n') + 1)];
         int parts = Math.Clamp(lines.Length / SmallestPart, 1, Math.Min(MostParts, Environment.ProcessorCount));
         int[] starts = new int[parts + 1], firstRows = new int[parts + 1], ends = new int[parts], found = new int[parts];
         for (int k = 1; k <= parts; k++)
@@ -45,7 +39,7 @@ internal sealed unsafe class PlainRows
             starts[k] = k == parts ? lines.Length : near + lines[near..].IndexOf((byte)'\n') + 1;
             firstRows[k] = firstRows[k - 1] + lines[starts[k - 1]..starts[k]].Count((byte)'\n');
         }
-        Target[] targets = Reserve(firstRows[parts]);
+        PlainCell[] cells = Reserve(firstRows[parts]);
         fixed (byte* text = lines)
         {
             nint at = (nint)text;
@@ -53,10 +47,19 @@ internal sealed unsafe class PlainRows
             for (int k = 1; k < parts; k++)
             {
                 int part = k;
-                others[k - 1] = Task.Run(() => ends[part] = starts[part] + Parse((byte*)at + starts[part], (byte*)at + starts[part + 1], firstRows[part], targets, out found[part]));
+                others[k - 1] = Task.Run(() => Parse(part));
             }
-            ends[0] = Parse((byte*)at, (byte*)at + starts[1], 0, targets, out found[0]);
-            Task.WaitAll(others);
+            try
+            {
+                Parse(0);
+            }
+            finally
+            {
+                // Nobody may still read the text when it is let go of.
+                Task.WaitAll(others);
+            }
+
+            void Parse(int k) => ends[k] = (int)(_parser.Parse((byte*)at + starts[k], (byte*)at + starts[k + 1], firstRows[k], cells, out found[k]) - (byte*)at);
         }
         rows = 0;
         int done = 0;
@@ -67,84 +70,37 @@ internal sealed unsafe class PlainRows
             if (done < starts[k + 1])
                 break; // The parts behind a row that is not plain stand in the wrong rows: they are read again.
         }
+        Commit(rows);
+        IsStopped = done < lines.Length;
+        _reach = IsStopped ? SmallestPart / 2 : (int)Math.Min(2L * _reach, int.MaxValue);
+        return done;
+    }
+
+    // Where the numbers of each cell of the next row go.
+    private PlainCell[] Reserve(int rows)
+    {
+        PlainCell[] cells = [.. _cells];
+        for (int i = 0; i < _table.Roles.Length; i++)
+        {
+            ref PlainCell cell = ref cells[_table.Shape.Columns[i]];
+            if (_table.Samples[i] is { } samples)
+                cell.Values = samples.Reserve(rows) + samples.Count;
+            else if (_table.Axes[i] is { } axis)
+            {
+                cell.Values = axis.Reserve(rows, out double* halves);
+                cell.Halves = halves;
+            }
+        }
+        return cells;
+    }
+
+    private void Commit(int rows)
+    {
         for (int i = 0; i < _table.Roles.Length; i++)
         {
             _table.Samples[i]?.Commit(rows);
             _table.Axes[i]?.Commit(rows);
         }
         _table.Rows += rows;
-        return done;
-    }
-
-    // Where the numbers of each cell of a row go; null for cells that nobody wants.
-    private Target[] Reserve(int rows) => Array.ConvertAll(_columnOfCell, i =>
-    {
-        if (i < 0)
-            return default;
-        if (_table.Samples[i] is { } samples)
-            return new Target(samples.Reserve(rows) + samples.Count, null);
-        AxisColumn axis = _table.Axes[i]!;
-        double* values = axis.Reserve(rows, out double* halves);
-        return new Target(values, halves);
-    });
-
-    private readonly struct Target(double* values, double* halves)
-    {
-        public readonly double* Values = values, Halves = halves;
-    }
-
-    // Bytes read of a part, whose rows are written from a row on.
-    private int Parse(byte* start, byte* end, int row, Target[] targets, out int rows)
-    {
-        byte delimiter = _delimiter, mark = _mark;
-        bool isSpaced = delimiter == RowSplitter.Spaces;
-        byte* p = start;
-        int first = row, last = targets.Length - 1;
-        fixed (double* powers = NumberParser.Powers, halfOf = NumberParser.Halves)
-        fixed (Target* target = targets)
-            while (p < end)
-            {
-                byte* line = p;
-                for (int c = 0; c <= last; c++)
-                {
-                    while (*p == ' ')
-                        p++;
-                    if (target[c].Values == null)
-                    {
-                        while (*p != delimiter && *p != '\n' && *p != '"')
-                            p++;
-                    }
-                    else
-                    {
-                        p = PlainNumber.Read(p, mark, powers, out double value, out int lastDigit);
-                        if (p == null)
-                            goto NotPlain;
-                        target[c].Values[row] = value;
-                        if (target[c].Halves != null)
-                            target[c].Halves[row] = lastDigit is >= -NumberParser.HalfRange and <= NumberParser.HalfRange ? halfOf[lastDigit + NumberParser.HalfRange] : NumberParser.HalfOf(lastDigit);
-                        byte* behind = p;
-                        while (*p == ' ')
-                            p++;
-                        if (isSpaced && p > behind)
-                            p--; // One space is the delimiter.
-                    }
-                    if (c < last && *p++ != delimiter)
-                        goto NotPlain;
-                }
-                if (*p == delimiter)
-                    p++;
-                if (*p == '\r')
-                    p++;
-                if (*p != '\n')
-                    goto NotPlain;
-                p++;
-                row++;
-                continue;
-            NotPlain:
-                p = line;
-                break;
-            }
-        rows = row - first;
-        return (int)(p - start);
     }
 }

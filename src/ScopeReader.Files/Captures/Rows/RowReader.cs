@@ -1,6 +1,4 @@
-using System.Text;
 using ScopeReader.Files.Meaning;
-using ScopeReader.Files.Numbers;
 using ScopeReader.Files.Structure;
 using ScopeReader.Files.Text;
 
@@ -12,6 +10,7 @@ internal sealed class RowReader
     private const int Patience = 100, FewLines = 8;
 
     private readonly TextWindow _text;
+    private readonly string _file;
     private readonly Table _table;
     private readonly PlainRows? _plain;
     private readonly RowCells _cells;
@@ -24,7 +23,7 @@ internal sealed class RowReader
     /// <param name="table">Where the rows go.</param>
     public RowReader(TextWindow text, string file, Table table)
     {
-        (_text, _table, _plain) = (text, table, PlainRows.For(table));
+        (_text, _file, _table, _plain) = (text, file, table, PlainRows.For(table));
         _cells = new RowCells(file, table.Shape);
         _row = new TableRow(file, table, _cells);
     }
@@ -60,6 +59,9 @@ internal sealed class RowReader
     {
         ReadOnlySpan<byte> lines = _text.Pending;
         lines = lines[..(lines.LastIndexOf((byte)'\n') + 1)];
+        // A row takes two bytes at least.
+        if (_table.Rows > Table.MostRows - lines.Length / 2)
+            throw new ImportException(_file, FormattableString.Invariant($"expected at most {Table.MostRows} rows, found more. Cut the capture."), _text.Line);
         int done = 0, slow = 0;
         long count = 0;
         bool ended = false;
@@ -73,6 +75,8 @@ internal sealed class RowReader
                 slow = rows > 0 ? 0 : slow + 1;
                 if (done == lines.Length)
                     break;
+                if (!_plain.IsStopped)
+                    continue;
             }
             ReadOnlySpan<byte> rest = lines[done..];
             int end = rest.IndexOf((byte)'\n');

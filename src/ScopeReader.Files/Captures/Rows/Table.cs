@@ -6,6 +6,9 @@ namespace ScopeReader.Files.Rows;
 /// <summary>A block of numbers that was read.</summary>
 internal sealed class Table
 {
+    /// <summary>The most rows that are held: what an array of doubles takes, and a little less.</summary>
+    public const int MostRows = 2_000_000_000;
+
     /// <param name="shape">How its rows are built.</param>
     /// <param name="header">What stands right above it.</param>
     /// <param name="facts">What the text round it says.</param>

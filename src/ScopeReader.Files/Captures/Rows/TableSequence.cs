@@ -43,7 +43,7 @@ internal sealed class TableSequence(TextWindow text, string file, ImportSettings
             return 0;
         string[][] sample = [.. shape.Rows.Skip(shape.First).Take(SampleRows)];
         double length = sample.Average(row => row.Sum(cell => cell.Length + 1.0));
-        return (int)Math.Min(text.Remaining / Math.Max(length, 2) * 1.05 + 16, int.MaxValue / 16);
+        return (int)Math.Min(text.Remaining / Math.Max(length, 2) * 1.05 + 16, Table.MostRows);
     }
 
     // Blocks of one file are mostly built alike: the next row that fits the last block begins the next one.

@@ -96,7 +96,9 @@ internal static class SeriesVerb
 
     private static Func<string, IReadOnlyList<SeriesPoint>> FromFiles(string[] files, Condition[] settings, Plan plan, string? channel, string condition, Surroundings to, CancellationToken cancellation)
     {
-        MeasuredFile[] measured = [.. files.Select(f => CaptureMeasurer.Measure(f, plan, channel, null, cancellation))];
+        using ProgressLine progress = to.Progress(cancellation);
+        MeasuredFile[] measured = [.. files.Select(f => CaptureMeasurer.Measure(f, plan, channel, progress, cancellation))];
+        progress.Hide();
         foreach (MeasuredFile file in measured.Where(m => m.Error is not null))
             to.Error.WriteLine(SafeText.Of(file.Error!));
         return quantity =>
