@@ -29,5 +29,6 @@ for line in open(sys.argv[1]):
 median = {name: statistics.median(s for s, _ in found) for name, found in runs.items()}
 for name, found in runs.items():
     print(f"{name}: median {median[name]:.2f} s of {len(found)}, peak {max(m for _, m in found):.0f} MB")
-print(f"{sys.argv[2]} rows: {median['pandas'] / median['inspect']:.1f} times faster")
+kept = int(sys.argv[2]) * 8 / 2**20
+print(f"{sys.argv[2]} rows: {median['pandas'] / median['inspect']:.1f} times faster; {max(m for _, m in runs['inspect']) - kept:.0f} MB beyond the {kept:.0f} MB of samples kept")
 END

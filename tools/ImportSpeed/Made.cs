@@ -7,10 +7,22 @@ namespace ScopeReader.ImportSpeed;
 /// <summary>Long made exports in several shapes.</summary>
 internal static class Made
 {
-    public static void Write(string file, string shape, long rows)
+    /// <summary>The shapes, the plain one first.</summary>
+    public static IReadOnlyList<string> Shapes { get; } = ["plain", "crlf", "semicolon", "tab", "spaces", "quoted", "long", "short", "channels", "index", "clock", "unitcells", "units", "utf16", "gzip"];
+
+    /// <summary>An export in memory.</summary>
+    public static byte[] Bytes(string shape, long rows)
     {
-        using Stream stream = shape == "gzip" ? new GZipStream(File.Create(file), CompressionLevel.Fastest) : File.Create(file);
-        using var writer = new StreamWriter(stream, shape == "utf16" ? Encoding.Unicode : new UTF8Encoding(false), 1 << 20);
+        using var bytes = new MemoryStream();
+        Write(bytes, shape, rows);
+        return bytes.ToArray();
+    }
+
+    /// <summary>Writes an export.</summary>
+    public static void Write(Stream to, string shape, long rows)
+    {
+        using Stream stream = shape == "gzip" ? new GZipStream(to, CompressionLevel.Fastest, leaveOpen: true) : to;
+        using var writer = new StreamWriter(stream, shape == "utf16" ? Encoding.Unicode : new UTF8Encoding(false), 1 << 20, leaveOpen: true);
         var random = new Random(1);
         for (long i = 0; i < rows; i++)
         {
@@ -23,21 +35,17 @@ internal static class Made
                 "semicolon" => $"{time.Replace('.', ',')};{value.Replace('.', ',')}\n",
                 "tab" => $"{time}\t{value}\n",
                 "spaces" => $"{time}   {value}\n",
+                "quoted" => $"\"{time}\",\"{value}\"\n",
                 "long" => $"{t.ToString("E16", CultureInfo.InvariantCulture)},{v.ToString("E16", CultureInfo.InvariantCulture)}\n",
+                "short" => string.Create(CultureInfo.InvariantCulture, $"{t:R},{v:R}\n"),
                 "channels" => $"{time},{value},{value},{value},{value}\n",
+                "index" => string.Create(CultureInfo.InvariantCulture, $"{i},{value},{value},\n"),
+                "clock" => string.Create(CultureInfo.InvariantCulture, $"{i / 3_600_000_000 % 24:00}:{i / 60_000_000 % 60:00}:{i / 1e6 % 60:00.000000},{value}\n"),
+                "unitcells" => $"{time},s,{value}, V,\n",
                 "units" => $"{time}s,{value}V\n",
                 _ => $"{time},{value}\n",
             });
         }
-    }
-
-    /// <summary>The most memory that this process has held, from the system's own count.</summary>
-    public static double PeakMegabytes()
-    {
-        foreach (string line in File.ReadLines("/proc/self/status"))
-            if (line.StartsWith("VmHWM:", StringComparison.Ordinal))
-                return double.Parse(line.AsSpan(6, line.Length - 6 - 3), CultureInfo.InvariantCulture) / 1024;
-        return 0;
     }
 
     // Exponents of two digits, as most instruments print them.

@@ -1,5 +1,3 @@
-using System.Numerics;
-using System.Runtime.InteropServices;
 using ScopeReader.Captures;
 using ScopeReader.Files.Axes;
 using ScopeReader.Files.Meaning;
@@ -71,15 +69,17 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
 
     /// <summary>Adds a waveform.</summary>
     /// <param name="waveform">The waveform.</param>
+    /// <param name="samples">Its samples.</param>
     /// <param name="missing">How many samples round it are missing.</param>
-    public void Add(Waveform waveform, int missing)
+    public void Add(Waveform waveform, ReadOnlyMemory<double> samples, int missing)
     {
         if (settings.Segment is { } wanted && wanted != waveform.Segment)
             return;
-        (double minimum, double maximum) = Range(waveform.Samples);
-        int clipped = Clipping.Count(waveform.Samples, minimum, maximum);
+        SampleRange range = SampleRange.Of(samples);
+        (double minimum, double maximum, _, _) = range;
+        (int clipped, int first) = Clipping.Find(samples, range);
         if (clipped > 0)
-            Doubts.Add(FormattableString.Invariant($"{waveform.Name}: {clipped} of {waveform.Count} samples are held at {minimum:G4} or {maximum:G4}: clipped, so levels and harmonics read wrong"));
+            Doubts.Add(FormattableString.Invariant($"{waveform.Name}: {clipped} of {waveform.Count} samples are held at {minimum:G4} or {maximum:G4}, the first is sample {first + 1}: clipped, so levels and harmonics read wrong"));
         _channels.Add(waveform);
         _reports.Add(new ChannelReport(waveform.Name, "waveform", waveform.Unit, waveform.Segment, waveform.Count, minimum, maximum, clipped, missing));
     }
@@ -91,7 +91,7 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
     {
         if (settings.Segment is { } wanted && wanted != trace.Segment)
             return;
-        (double minimum, double maximum) = Range(trace.Levels);
+        (double minimum, double maximum, _, _) = SampleRange.Of(trace.Levels.ToArray());
         _channels.Add(trace);
         _reports.Add(new ChannelReport(trace.Name, "spectrum", trace.Unit, trace.Segment, trace.Count, minimum, maximum, 0, missing));
     }
@@ -108,22 +108,5 @@ internal sealed class CaptureBuilder(string file, ImportSettings settings, doubl
         }
         for (int i = 0; (factor != 1 || _scale != 1) && i < values.Length; i++)
             values[i] = UnitWords.Scale(values[i], factor) * _scale;
-    }
-
-    private static (double Minimum, double Maximum) Range(ReadOnlySpan<double> values)
-    {
-        double minimum = double.PositiveInfinity, maximum = double.NegativeInfinity;
-        ReadOnlySpan<Vector<double>> wide = MemoryMarshal.Cast<double, Vector<double>>(values);
-        if (wide.Length > 0)
-        {
-            Vector<double> low = wide[0], high = wide[0];
-            foreach (Vector<double> v in wide)
-                (low, high) = (Vector.Min(low, v), Vector.Max(high, v));
-            for (int i = 0; i < Vector<double>.Count; i++)
-                (minimum, maximum) = (Math.Min(minimum, low[i]), Math.Max(maximum, high[i]));
-        }
-        foreach (double v in values[(wide.Length * Vector<double>.Count)..])
-            (minimum, maximum) = (Math.Min(minimum, v), Math.Max(maximum, v));
-        return (minimum, maximum);
     }
 }

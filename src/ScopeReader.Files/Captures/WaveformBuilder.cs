@@ -13,17 +13,27 @@ internal static class WaveformBuilder
         SampleColumn column = table.Samples[source.Index]!;
         int added = 0;
         foreach (TimedPiece piece in pieces)
-            if (AddPiece(capture, source, column.Memory.Slice(piece.First, piece.Length), column.Missing, piece))
-                added++;
+            foreach ((SampleSource channel, Memory<double> samples) in Channels(source, column, piece))
+                if (AddPiece(capture, channel, samples, column.Missing, piece))
+                    added++;
         if (added == 0)
             throw new ImportException(capture.File, $"expected numbers in {source.Name}, found none. Leave the column out: --columns with skip in its place.", table.FirstLine, table.Shape.Columns[source.Index] + 1);
+    }
+
+    private static (SampleSource, Memory<double>)[] Channels(SampleSource source, SampleColumn column, TimedPiece piece)
+    {
+        if (!piece.IsPaired)
+            return [(source, column.Memory.Slice(piece.First, Math.Clamp(column.Filled - piece.First, 0, piece.Length)))];
+        ReadOnlySpan<double> pairs = column.Values.Slice(piece.First, 2 * piece.Length);
+        double[] low = new double[piece.Length], high = new double[piece.Length];
+        for (int k = 0; k < low.Length; k++)
+            (low[k], high[k]) = (Math.Min(pairs[2 * k], pairs[2 * k + 1]), Math.Max(pairs[2 * k], pairs[2 * k + 1]));
+        return [(source with { Name = source.Name + ", low" }, low), (source with { Name = source.Name + ", high" }, high)];
     }
 
     private static bool AddPiece(CaptureBuilder capture, SampleSource source, Memory<double> samples, int missingInColumn, TimedPiece piece)
     {
         ReadOnlySpan<double> values = samples.Span;
-        // A channel may be recorded over fewer rows than its neighbours.
-        values = values[..(values.LastIndexOfAnyExcept(double.NaN) + 1)];
         int missing = missingInColumn == 0 ? 0 : values.Count(double.NaN);
         (int start, int length) = missing == 0 ? (0, values.Length) : LongestWhole(values);
         if (length == 0)
@@ -42,7 +52,7 @@ internal static class WaveformBuilder
         TimeAxis axis = piece.Axis;
         if (axis.IsTimed && before > 0)
             axis = new TimeAxis(axis.Start + before * axis.Interval, axis.Interval, axis.Source, axis.IntervalLow, axis.IntervalHigh);
-        capture.Add(new Waveform(source.Name, source.Unit, axis, samples, segment), missing);
+        capture.Add(new Waveform(source.Name, source.Unit, axis, samples, segment), samples, missing);
         return true;
     }
 

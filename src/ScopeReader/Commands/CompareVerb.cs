@@ -29,8 +29,7 @@ internal static class CompareVerb
             string[] named = MeasureVerb.CheckedFiles(parsed.GetValue(files)!), others = MeasureVerb.CheckedFiles(parsed.GetValue(with) ?? []);
             if (named.Length + others.Length < 2)
                 throw new UsageException("compare needs two captures or more: scopereader compare BEFORE AFTER");
-            if (named.Concat(others).Count(f => f == "-") > 1)
-                throw new UsageException("standard input (-) can be read once");
+            MeasureVerb.CheckedFiles([.. named, .. others]);
             if (parsed.GetValue(json) && parsed.GetValue(csv))
                 throw new UsageException("--json and --csv are two forms of the output; keep one of them");
             string[][] sides = others.Length > 0 ? [named, others] : [.. named.Select(f => new[] { f })];

@@ -59,7 +59,7 @@ internal static class MeasureVerb
     {
         if (files.Any(f => f.Length == 0))
             throw new UsageException("a file's name is empty");
-        return files.Count(f => f == "-") > 1 ? throw new UsageException("standard input can be read once, and - is given more than once") : files;
+        return files.Count(f => f == "-") > 1 ? throw new UsageException("standard input (-) can be read once") : files;
     }
 
     private static int Jobs(string? text)

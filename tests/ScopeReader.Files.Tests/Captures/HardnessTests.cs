@@ -26,6 +26,67 @@ public class HardnessTests
         Refusal(Repeated("1.5 and so on ", 3 << 20)).Message);
 
     [Fact]
+    public void Line_of_a_hundred_megabytes_names_the_limit() => Assert.Equal(
+        "made.csv, line 2: expected lines of at most 1 MB, found a longer one. Export the capture as CSV with one sample of each channel a line.",
+        Assert.Throws<ImportException>(() => CaptureReader.Read(new LongStream("t,u\n"u8.ToArray(), "1.5,"u8.ToArray(), 100 << 20), "made.csv", ImportSettings.Automatic)).Message);
+
+    [Theory]
+    [InlineData(20_000)]
+    [InlineData(2_000_000)]
+    public void Quotes_in_quotes_in_quotes_name_the_limit_or_the_cell(int count)
+    {
+        string message = Import.Refusal("t,u\n0.0,1\n0.1,2\n0.2," + new string('"', count) + "\n0.3,4\n0.4,5\n").Message;
+        Assert.StartsWith(count > 1 << 20 ? "made.csv, line 4: expected lines of at most 1 MB, found a longer one." : "made.csv, line 4, column 2: expected a number, found \"\"\"\"", message, StringComparison.Ordinal);
+        Assert.InRange(message.Length, 1, 300);
+    }
+
+    [Fact]
+    public void First_column_that_may_be_seconds_or_hertz_is_refused_with_both_readings() => Assert.Equal(
+        "made.csv, line 1, column 1: expected an axis in s or Hz, found a first column without a name from 0.5 to 3000.5: times or frequencies. Give --columns time or --columns frequency.",
+        Import.Refusal("0.5,1\n1000.5,2\n2000.5,3\n3000.5,2\n").Message);
+
+    [Theory]
+    [InlineData("time")]
+    [InlineData("frequency")]
+    public void What_the_person_says_of_the_first_column_settles_it(string role) =>
+        Assert.Equal(role == "time", Import.Text("0.5,1\n1000.5,2\n2000.5,3\n3000.5,2\n", new ImportSettings { Columns = [role] }).Capture.Channels[0] is Waveform);
+
+    [Fact]
+    public void Clipped_samples_are_counted_and_located()
+    {
+        // By construction: a triangle from -1.5 to 1.5 in steps of 0.05, cut off at +1, is held at 1 for 21 samples a period of 120.
+        double[] triangle = [.. Enumerable.Range(0, 480).Select(i => Math.Round(Math.Min(1, 1.5 - 0.05 * Math.Abs(60 - i % 120)), 2))];
+        int held = triangle.Count(v => v == 1), first = Array.IndexOf(triangle, 1.0) + 1;
+        CaptureFile file = Import.Text("U (V)\n" + string.Concat(triangle.Select(v => v.ToString(System.Globalization.CultureInfo.InvariantCulture) + "\n")), new ImportSettings { Interval = 1e-6 });
+
+        Assert.Equal(held, file.Report.Channels[0].Clipped);
+        Assert.Contains($"U: {held} of 480 samples are held at -1.5 or 1, the first is sample {first}: clipped, so levels and harmonics read wrong", file.Capture.Doubts);
+    }
+
+    [Theory]
+    [InlineData(false)]
+    [InlineData(true)]
+    public void Lowest_and_highest_of_each_interval_in_rows_of_their_own_are_two_channels(bool breaksOff)
+    {
+        // By construction: every microsecond once with -k/4 and once with k/8.
+        string rows = string.Concat(Enumerable.Range(0, 40).Select(k => FormattableString.Invariant($"{k * 1e-6:0.000000E+00},{-k / 4.0}\n{k * 1e-6:0.000000E+00},{k / 8.0}\n")));
+        CaptureFile file = Import.Text("Time (s),U (V)\n" + (breaksOff ? rows[..rows.LastIndexOf("3.9", StringComparison.Ordinal)] : rows));
+
+        Assert.Equal(["U, low", "U, high"], file.Capture.Channels.Select(c => c.Name));
+        Assert.Equal((breaksOff ? 39 : 40, 1e-6, -0.5, 0.25), (file.Waveform(0).Count, file.Waveform(0).Interval, file.Waveform(0).Samples[2], file.Waveform(1).Samples[2]));
+        Assert.Contains("each time stands twice: read as the lowest and the highest sample of every interval, two channels", file.Capture.Doubts);
+    }
+
+    [Fact]
+    public void A_gap_every_few_rows_costs_no_more_than_its_rows()
+    {
+        // Rows of another kind every 50: what lies behind each is not read in vain. 200 MB for 4 MB of text would be that.
+        string text = "Time (s),U (V)\n" + string.Concat(Enumerable.Range(0, 200_000).Select(i => FormattableString.Invariant($"{i}e-6,{(i % 50 == 49 ? "OL" : "1.25")}\n")));
+        CaptureFile file = Import.Text(text);
+        Assert.Equal((4000, 49), (file.Report.Channels[0].Missing, file.Waveform().Count));
+    }
+
+    [Fact]
     public void Ten_thousand_columns_name_the_limit() => Assert.Equal(
         "made.csv, line 1: expected lines of at most 4096 cells, found a longer one. Export fewer channels at a time.",
         Refusal(Encoding.UTF8.GetBytes(string.Concat(Enumerable.Repeat(string.Concat(Enumerable.Repeat("1,", 10_000)) + "1\n", 3)))).Message);

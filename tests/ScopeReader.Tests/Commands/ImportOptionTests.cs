@@ -145,5 +145,5 @@ public sealed class ImportOptionTests : IDisposable
 
     [Fact]
     public async Task Standard_input_is_read_once() =>
-        Assert.Equal((64, "", "scopereader: standard input can be read once, and - is given more than once\n"), await Run.Program("measure", "-", "-"));
+        Assert.Equal((64, "", "scopereader: standard input (-) can be read once\n"), await Run.Program("measure", "-", "-"));
 }

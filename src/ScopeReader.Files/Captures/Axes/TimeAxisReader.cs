@@ -28,6 +28,11 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
         var pieces = new List<TimedPiece>();
         if (fitted is { } spacing)
             pieces.Add(Timed(new Piece(0, times.Rows, spacing), factor, column));
+        else if (TimePairs.Of(times.Values(), times.WidestHalf) is { } paired)
+        {
+            capture.Doubt("each time stands twice: read as the lowest and the highest sample of every interval, two channels");
+            pieces.Add(Timed(new Piece(0, times.Rows / 2, paired), factor, column) with { IsPaired = true });
+        }
         else
             foreach (Piece piece in new TimeCutter(capture, table).Cut(times.Values(), times.WidestHalf, ColumnNumber(column)))
                 pieces.Add(Timed(piece, factor, column));
@@ -113,10 +118,10 @@ internal sealed class TimeAxisReader(CaptureBuilder capture, Table table)
                     capture.Doubt($"the times are rounded; the interval that the preamble states, {Engineering.Format(stated, "s", 6)}, lies in their range and is used");
                 return new TimedPiece(piece.First, piece.Length, new TimeAxis(start, stated, AxisSource.Column), falls);
             }
-            capture.Doubt(FormattableString.Invariant($"the preamble states an interval of {Engineering.Format(stated, "s", 6)}, the times say {Engineering.Format(interval, "s", 6)} ({(stated / interval - 1) * 1e6:G3} ppm off): the times are used"));
+            capture.Doubt($"the preamble states an interval of {Engineering.Format(stated, "s", 6)}, the times say {Engineering.Format(interval, "s", 6)} ({Engineering.Format((stated / interval - 1) * 1e6, "ppm", 3)} off): the times are used");
         }
         if (high - low > 2 * Fine * interval)
-            capture.Doubt(FormattableString.Invariant($"the times are printed too coarsely to know the interval better than ± {(high - low) / 2 / interval * 1e6:G3} ppm; --interval or --rate settles it"));
+            capture.Doubt($"the times are printed too coarsely to know the interval better than ± {Engineering.Format((high - low) / 2 / interval * 1e6, "ppm", 2)}; --interval or --rate settles it");
         return new TimedPiece(piece.First, piece.Length, new TimeAxis(start, interval, AxisSource.Column, low, high), falls);
     }
 }

@@ -7,4 +7,5 @@ namespace ScopeReader.Files.Axes;
 /// <param name="Length">How many rows.</param>
 /// <param name="Axis">When they were taken; the start is that of the earliest.</param>
 /// <param name="Falls">True where the rows run backwards in time.</param>
-internal sealed record TimedPiece(int First, int Length, TimeAxis Axis, bool Falls = false);
+/// <param name="IsPaired">True where two rows stand for each instant.</param>
+internal sealed record TimedPiece(int First, int Length, TimeAxis Axis, bool Falls = false, bool IsPaired = false);

@@ -76,7 +76,7 @@ internal static class Roles
     private static ColumnRole ByNumbers(string file, TableShape shape, Label[] labels, Facts facts, long startLine)
     {
         double[] x = [.. First(shape, 0)];
-        if (x.Length < Enough || !Rises(x))
+        if (x.Length < Enough || !Rises(x, WidestHalf(shape, 0)))
             return ColumnRole.Value;
         if (IsCount(x))
             return ColumnRole.Index;
@@ -117,13 +117,23 @@ internal static class Roles
         return double.IsInteger(x[0]);
     }
 
-    private static bool Rises(double[] x)
+    private static bool Rises(double[] x, double half = 0)
     {
         double mean = (x[^1] - x[0]) / (x.Length - 1);
         for (int i = 1; i < x.Length; i++)
-            if (x[i] < x[i - 1] || x[i] - x[i - 1] > 2.5 * mean)
+            if (x[i] < x[i - 1] || x[i] - x[i - 1] > 2.5 * mean + 2 * half)
                 return false;
         return mean > 0;
+    }
+
+    // Times printed to few digits step by none or by a last digit; whole numbers do not come from rounding.
+    private static double WidestHalf(TableShape shape, int column)
+    {
+        double widest = 0;
+        foreach (string[] row in shape.Rows.Skip(shape.First).Take(Math.Max(shape.Sampled, 1)))
+            if (shape.Columns[column] < row.Length && Cell.Read(row[shape.Columns[column]], shape.Mark) is { Kind: CellKind.Number, Half: < 0.5 } cell)
+                widest = Math.Max(widest, cell.Half);
+        return widest;
     }
 
     private static IEnumerable<double> First(TableShape shape, int column)

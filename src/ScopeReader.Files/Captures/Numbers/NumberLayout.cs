@@ -13,7 +13,7 @@ internal struct NumberLayout
     /// <summary>How many bytes may be looked at from the start of a number on, after its sign.</summary>
     public const int Reach = 16;
 
-    private const int Most = 15, MostPowerDigits = 4, MostCredit = 8, Retry = 64;
+    private const int Most = 15, MostPowerDigits = 4, Rare = 2, Retry = 64;
 
     // Characters as they must be: '0' stands for any digit, '+' for either sign of the exponent.
     private Vector128<byte> _expected;
@@ -25,60 +25,75 @@ internal struct NumberLayout
     private Vector128<byte> _places;
 
     private int _length, _fraction, _sign, _power, _powerDigits;
-    private int _credit, _misses;
-
-    /// <summary>True where the processor has what it takes; elsewhere every number is read the scalar way.</summary>
-    public static bool IsSupported => Sse41.IsSupported;
+    private int _missedRow, _misses;
 
     /// <summary>A layout that no number has.</summary>
-    public static NumberLayout None => new() { _expected = Vector128<byte>.AllBitsSet, _credit = MostCredit };
+    public static NumberLayout None => new() { _expected = Vector128<byte>.AllBitsSet, _missedRow = int.MinValue / 2 };
 
-    /// <summary>Reads the number at a place.</summary>
+    /// <summary>Exact powers of ten from 0 on, then halves of last digits from that of the smallest.</summary>
+    public static double[] Tables { get; } = [.. NumberParser.Powers, .. NumberParser.Halves];
+
+    /// <summary>Reads the number at a place if it is printed as the last one was.</summary>
     /// <param name="p">Where it begins; <see cref="Reach"/> bytes behind its sign may be looked at.</param>
-    /// <param name="mark">The decimal mark.</param>
-    /// <param name="powers">The exact powers of ten.</param>
     /// <param name="layout">How the column's last number was printed.</param>
-    /// <param name="value">The number, correctly rounded.</param>
-    /// <param name="lastDigit">Decimal exponent of its last printed digit.</param>
-    /// <returns>The place behind it, or null where there is no number or one that stands for none.</returns>
+    /// <param name="tables"><see cref="Tables"/>.</param>
+    /// <param name="value">Where the number goes, correctly rounded.</param>
+    /// <param name="half">Where half of its last printed digit goes; null for nowhere.</param>
+    /// <returns>The place behind it; null where it is printed in another way.</returns>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static unsafe byte* Read(byte* p, byte mark, double* powers, NumberLayout* layout, out double value, out int lastDigit)
+    public static unsafe byte* ReadAlike(byte* p, NumberLayout* layout, double* tables, double* value, double* half)
     {
-        byte* start = p;
+        if (!Sse41.IsSupported)
+            return null;
         bool negative = *p == '-';
         p += negative || *p == '+' ? 1 : 0;
-        if (Sse41.IsSupported)
+        Vector128<byte> off = Vector128.Load(p) ^ layout->_expected;
+        if (!Vector128.EqualsAll(Vector128.Max(off, layout->_limit), layout->_limit))
+            return null;
+        int exponent = -layout->_fraction;
+        if (layout->_powerDigits > 0)
         {
-            Vector128<byte> off = Vector128.Load(p) ^ layout->_expected;
-            if (Vector128.EqualsAll(Vector128.Max(off, layout->_limit), layout->_limit))
-            {
-                int exponent = -layout->_fraction;
-                if (layout->_powerDigits > 0)
-                    exponent += PowerAt(p, layout);
-                if ((uint)(exponent + NumberParser.ExactPower) <= 2 * NumberParser.ExactPower)
-                {
-                    // Fifteen digits at most: an exact double.
-                    double exact = Digits(Ssse3.Shuffle(off, layout->_places));
-                    exact = exponent < 0 ? exact / powers[-exponent] : exact * powers[exponent];
-                    value = negative ? -exact : exact;
-                    lastDigit = exponent;
-                    layout->_credit = Math.Min(layout->_credit + 1, MostCredit);
-                    return p + layout->_length;
-                }
-            }
+            byte* digit = p + layout->_power;
+            int power = *digit & 15;
+            for (int k = 1; k < layout->_powerDigits; k++)
+                power = power * 10 + (digit[k] & 15);
+            int sign = layout->_sign == 0 ? '+' : p[layout->_sign];
+            exponent += sign == '-' ? -power : power;
+            // Between '+' and '-' lies more in the code than the limit can tell apart.
+            if (((sign - '+') & ~('-' - '+')) != 0)
+                return null;
         }
-        return ReadOther(start, mark, layout, out value, out lastDigit);
+        if ((uint)(exponent + NumberParser.ExactPower) > 2 * NumberParser.ExactPower)
+            return null;
+        // Fifteen digits at most: an exact double.
+        double exact = (long)Digits(Ssse3.Shuffle(off, layout->_places));
+        exact = exponent < 0 ? exact / tables[-exponent] : exact * tables[exponent];
+        *value = negative ? -exact : exact;
+        if (half != null)
+            *half = tables[NumberParser.ExactPower + 1 + NumberParser.HalfRange + exponent];
+        return p + layout->_length;
     }
 
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static unsafe int PowerAt(byte* p, NumberLayout* layout)
+    /// <summary>Reads the number at a place however it is printed, and learns that where it pays.</summary>
+    /// <param name="p">Where it begins; <see cref="Reach"/> bytes behind its sign may be looked at.</param>
+    /// <param name="mark">The decimal mark.</param>
+    /// <param name="layout">How the column's last number was printed.</param>
+    /// <param name="row">The row, so that numbers of ever other lengths are not learnt.</param>
+    /// <param name="value">Where the number goes, correctly rounded.</param>
+    /// <param name="half">Where half of its last printed digit goes; null for nowhere.</param>
+    /// <returns>The place behind it; null where there is no number, or one that stands for none.</returns>
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    public static unsafe byte* ReadAny(byte* p, byte mark, NumberLayout* layout, int row, double* value, double* half)
     {
-        byte* digit = p + layout->_power;
-        int power = *digit & 15;
-        for (int k = 1; k < layout->_powerDigits; k++)
-            power = power * 10 + (digit[k] & 15);
-        // Between '+' and '-' there is only a comma in the code: it, too, differs by no more than the limit allows.
-        return layout->_sign == 0 ? power : p[layout->_sign] switch { (byte)'+' => power, (byte)'-' => -power, _ => int.MaxValue / 2 };
+        byte* end = PlainNumber.Read(p, mark, out *value, out int lastDigit);
+        if (end == null)
+            return null;
+        if (half != null)
+            *half = NumberParser.HalfOf(lastDigit);
+        if (row - layout->_missedRow > Rare || ++layout->_misses % Retry == 0)
+            layout->Learn(p + (*p is (byte)'-' or (byte)'+' ? 1 : 0), end, mark);
+        layout->_missedRow = row;
+        return end;
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
@@ -89,21 +104,6 @@ internal struct NumberLayout
         Vector128<short> narrow = Sse41.PackUnsignedSaturate(fours, fours).AsInt16();
         ulong eights = Sse2.MultiplyAddAdjacent(narrow, Vector128.Create(0x00012710).AsInt16()).AsUInt64().ToScalar();
         return (eights & uint.MaxValue) * 100_000_000 + (eights >> 32);
-    }
-
-    [MethodImpl(MethodImplOptions.NoInlining)]
-    private static unsafe byte* ReadOther(byte* start, byte mark, NumberLayout* layout, out double value, out int lastDigit)
-    {
-        byte* end = PlainNumber.Read(start, mark, out value, out lastDigit);
-        if (end == null || !Sse41.IsSupported)
-            return end;
-        // Numbers of ever other lengths are not worth learning.
-        layout->_credit -= 2;
-        layout->_misses++;
-        if (layout->_credit > 0 || layout->_misses % Retry == 0)
-            layout->Learn(start + (*start is (byte)'-' or (byte)'+' ? 1 : 0), end, mark);
-        layout->_credit = Math.Max(layout->_credit, -MostCredit);
-        return end;
     }
 
     private unsafe void Learn(byte* p, byte* end, byte mark)

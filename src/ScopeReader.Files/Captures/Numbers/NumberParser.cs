@@ -30,7 +30,7 @@ internal static class NumberParser
     public static readonly double[] Halves = [.. Enumerable.Range(-HalfRange, 2 * HalfRange + 1).Select(e => 0.5 * Math.Pow(10, e))];
 
     /// <summary>Half of a last digit at a decimal exponent.</summary>
-    public static double HalfOf(int lastDigit) => 0.5 * Math.Pow(10, lastDigit);
+    public static double HalfOf(int lastDigit) => lastDigit is >= -HalfRange and <= HalfRange ? Halves[lastDigit + HalfRange] : 0.5 * Math.Pow(10, lastDigit);
 
     /// <summary>Reads a whole cell as a number.</summary>
     /// <param name="cell">UTF-8, without spaces round it.</param>

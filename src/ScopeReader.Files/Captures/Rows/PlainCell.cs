@@ -24,6 +24,12 @@ internal unsafe struct PlainCell
     /// <summary>Where half of its last digit goes; null where nobody asks.</summary>
     public double* Halves { get; set; }
 
+    /// <summary>True for a wanted number with no unit to it.</summary>
+    public readonly bool IsBare => Kind == PlainCellKind.Number && !IsScaled;
+
+    /// <summary>Where half of the last digit of a row's number goes; null for nowhere.</summary>
+    public readonly double* HalfOf(int row) => Halves == null ? null : Halves + row;
+
     /// <summary>Length of the unit that stands here or behind the number, bytes; 0 for none.</summary>
     public int UnitLength { get; private set; }
 
@@ -66,11 +72,13 @@ internal unsafe struct PlainCell
     /// <param name="p">Eight bytes from it on may be looked at.</param>
     public readonly bool HasUnit(byte* p) => (Unsafe.ReadUnaligned<ulong>(p) & _unitBits) == _unit;
 
-    /// <summary>A number in the base unit, as <see cref="UnitWords.Scale"/> makes it.</summary>
-    public readonly double InBaseUnit(double value) => _divisor > 0 ? value / _divisor : value * _factor;
-
-    /// <summary>Half of a last digit in the base unit.</summary>
-    public readonly double HalfInBaseUnit(double half) => half * _factor;
+    /// <summary>Turns a number and half of its last digit into the base unit, as <see cref="UnitWords.Scale"/> does.</summary>
+    public readonly void ToBaseUnit(double* value, double* half)
+    {
+        *value = _divisor > 0 ? *value / _divisor : *value * _factor;
+        if (half != null)
+            *half *= _factor;
+    }
 
     private bool TryUnit(ReadOnlySpan<byte> text)
     {

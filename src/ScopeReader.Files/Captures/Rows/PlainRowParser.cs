@@ -1,3 +1,4 @@
+using System.Runtime.CompilerServices;
 using ScopeReader.Files.Numbers;
 using ScopeReader.Files.Structure;
 
@@ -27,9 +28,10 @@ internal sealed unsafe class PlainRowParser(TableShape shape, int cells)
     {
         int first = row, last = cells.Length - 1;
         byte* p = start;
+        byte delimiter = _delimiter;
         var layouts = new NumberLayout[cells.Length];
         Array.Fill(layouts, NumberLayout.None);
-        fixed (double* powers = NumberParser.Powers, halfOf = NumberParser.Halves)
+        fixed (double* tables = NumberLayout.Tables)
         fixed (PlainCell* cell = cells)
         fixed (NumberLayout* layout = layouts)
             while (p < end)
@@ -37,39 +39,19 @@ internal sealed unsafe class PlainRowParser(TableShape shape, int cells)
                 byte* line = p;
                 for (int c = 0; ; c++)
                 {
-                    while (*p == ' ' || (_isSpaced && *p == '\t'))
-                        p++;
-                    if (cell[c].Kind == PlainCellKind.Number)
-                    {
-                        bool isQuoted = *p == '"';
-                        p = NumberLayout.Read(isQuoted ? p + 1 : p, _mark, powers, layout + c, out double value, out int lastDigit);
-                        if (p == null)
-                            goto NotPlain;
-                        double half = cell[c].Halves == null ? 0 : lastDigit is >= -NumberParser.HalfRange and <= NumberParser.HalfRange ? halfOf[lastDigit + NumberParser.HalfRange] : NumberParser.HalfOf(lastDigit);
-                        if (cell[c].IsScaled)
-                        {
-                            if (cell[c].UnitLength > 0 && !cell[c].HasUnit(p))
-                                goto NotPlain;
-                            p += cell[c].UnitLength;
-                            (value, half) = (cell[c].InBaseUnit(value), cell[c].HalfInBaseUnit(half));
-                        }
-                        if (isQuoted && *p++ != '"')
-                            goto NotPlain;
-                        cell[c].Values[row] = value;
-                        if (cell[c].Halves != null)
-                            cell[c].Halves[row] = half;
-                    }
-                    else if ((p = Skip(p, cell + c)) == null)
+                    byte* next = cell[c].IsBare ? NumberLayout.ReadAlike(p, layout + c, tables, cell[c].Values + row, cell[c].HalfOf(row)) : null;
+                    if (next == null && (next = ReadCell(p, cell + c, layout + c, tables, row)) == null)
                         goto NotPlain;
-                    while (!_isSpaced && *p == ' ')
-                        p++;
+                    p = next;
                     if (c == last)
                         break;
-                    if (*p != _delimiter && !(_isSpaced && *p == '\t'))
+                    if (*p != delimiter && *(p = Padding(p)) != delimiter && !(_isSpaced && *p == '\t'))
                         goto NotPlain;
                     p++;
                 }
-                if ((p = EndOfRow(p)) == null)
+                if (*p == '\n')
+                    p++;
+                else if ((p = EndOfRow(p)) == null)
                     goto NotPlain;
                 row++;
                 continue;
@@ -78,6 +60,45 @@ internal sealed unsafe class PlainRowParser(TableShape shape, int cells)
                 break;
             }
         rows = row - first;
+        return p;
+    }
+
+    // A cell with whatever may stand round its number. Behind it and its padding; null where it is of another kind.
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    private byte* ReadCell(byte* p, PlainCell* cell, NumberLayout* layout, double* tables, int row)
+    {
+        while (*p == ' ' || (_isSpaced && *p == '\t'))
+            p++;
+        if (cell->Kind == PlainCellKind.Number)
+        {
+            bool isQuoted = *p == '"';
+            p += isQuoted ? 1 : 0;
+            double* value = cell->Values + row, half = cell->HalfOf(row);
+            byte* next = NumberLayout.ReadAlike(p, layout, tables, value, half);
+            if (next == null)
+                next = NumberLayout.ReadAny(p, _mark, layout, row, value, half);
+            p = next;
+            if (p == null)
+                return null;
+            if (cell->IsScaled)
+            {
+                if (cell->UnitLength > 0 && !cell->HasUnit(p))
+                    return null;
+                p += cell->UnitLength;
+                cell->ToBaseUnit(value, half);
+            }
+            if (isQuoted && *p++ != '"')
+                return null;
+        }
+        else if ((p = Skip(p, cell)) == null)
+            return null;
+        return Padding(p);
+    }
+
+    private byte* Padding(byte* p)
+    {
+        while (!_isSpaced && *p == ' ')
+            p++;
         return p;
     }
 
@@ -107,6 +128,7 @@ internal sealed unsafe class PlainRowParser(TableShape shape, int cells)
     // Behind the line feed; null where something stands before it that is no spare cell.
     private byte* EndOfRow(byte* p)
     {
+        p = Padding(p);
         if (_isSpaced)
             while (*p is (byte)' ' or (byte)'\t')
                 p++;

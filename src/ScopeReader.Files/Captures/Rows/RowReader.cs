@@ -110,6 +110,8 @@ internal sealed class RowReader
 
     private Outcome ReadLine(ReadOnlySpan<byte> line, ReadOnlySpan<byte> following, long number)
     {
+        if (line.Length > TextWindow.LongestLine)
+            throw _text.TooLong(number);
         _cells.Take(line, number);
         if (_cells.Filled == 0)
         {

@@ -7,6 +7,7 @@ namespace ScopeReader.Files.Rows;
 internal sealed unsafe class SampleColumn
 {
     private double[] _values;
+    private int _saidToBeNone;
 
     /// <param name="expected">How many there may be; room for them is taken at once, so that nothing is copied later.</param>
     public SampleColumn(int expected) => _values = Room(Math.Max(expected, 64));
@@ -16,6 +17,9 @@ internal sealed unsafe class SampleColumn
 
     /// <summary>How many of them are missing.</summary>
     public int Missing { get; private set; }
+
+    /// <summary>How many there are up to the last that is a value or said to be none; behind it the column was not filled.</summary>
+    public int Filled => Math.Max(_saidToBeNone, Values.LastIndexOfAnyExcept(double.NaN) + 1);
 
     /// <summary>What is there so far.</summary>
     public Span<double> Values => _values.AsSpan(0, Count);
@@ -40,8 +44,12 @@ internal sealed unsafe class SampleColumn
     public void Commit(int count) => Count += count;
 
     /// <summary>Adds one.</summary>
-    public void Add(double value)
+    /// <param name="value">NaN where it is missing.</param>
+    /// <param name="isSaidToBeNone">True where it is missing in so many words: over range, not a number.</param>
+    public void Add(double value, bool isSaidToBeNone = false)
     {
+        if (isSaidToBeNone)
+            _saidToBeNone = Count + 1;
         if (Count == _values.Length)
             Reserve(1);
         _values[Count++] = value;

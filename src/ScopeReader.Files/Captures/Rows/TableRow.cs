@@ -51,7 +51,7 @@ internal sealed class TableRow(string file, Table table, RowCells cells)
             table.Breaks.Add(table.Rows);
         for (int i = 0; i < _row.Length; i++)
         {
-            table.Samples[i]?.Add(_row[i].Value);
+            table.Samples[i]?.Add(_row[i].Value, _row[i].Kind == CellKind.Gap);
             table.Axes[i]?.Add(_row[i].Value, _row[i].Half, _row[i].IsClock);
         }
         table.Rows++;

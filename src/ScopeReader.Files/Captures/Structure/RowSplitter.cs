@@ -47,7 +47,7 @@ internal static class RowSplitter
         {
             if (cells.Count == MostCells)
                 throw new TooWideException(index);
-            cells.Add(Encoding.UTF8.GetString(Cell.Trim(cell)));
+            cells.Add(Unquoted(cell));
         }
         return cells is [""] ? [] : [.. cells];
     }
@@ -84,11 +84,31 @@ internal static class RowSplitter
             return true;
         }
         int from = 0, text = rest.IndexOfAnyExcept((byte)' ');
-        if (text >= 0 && rest[text] == '"' && rest[(text + 1)..].IndexOf((byte)'"') is >= 0 and int close)
-            from = text + close + 2;
+        if (text >= 0 && rest[text] == '"')
+            from = BehindQuotes(rest, text + 1);
         int end = rest[from..].IndexOf((byte)delimiter);
         cell = end < 0 ? rest : rest[..(from + end)];
         position += cell.Length + 1;
         return true;
+    }
+
+    private static string Unquoted(ReadOnlySpan<byte> cell)
+    {
+        ReadOnlySpan<byte> bare = Cell.Trim(cell);
+        string text = Encoding.UTF8.GetString(bare);
+        return bare.Length < cell.Trim(" \t\r"u8).Length ? text.Replace("\"\"", "\"", StringComparison.Ordinal) : text;
+    }
+
+    // Where the text behind a quote that opened ends, its closing quote passed: two quotes are one of the text. 0 where none closes it.
+    private static int BehindQuotes(ReadOnlySpan<byte> text, int from)
+    {
+        while (text[from..].IndexOf((byte)'"') is >= 0 and int found)
+        {
+            from += found + 1;
+            if (from == text.Length || text[from] != '"')
+                return from;
+            from++;
+        }
+        return 0;
     }
 }

@@ -7,7 +7,7 @@ namespace ScopeReader.Files.Text;
 /// <remarks>Once a file proves long, the next block is read and hashed beside the parsing of this one.</remarks>
 internal sealed class HashingStream(Stream inner, IProgress<ImportProgress>? progress) : ForwardStream
 {
-    private const int Block = 4 << 20, Long = 1 << 20;
+    private const int Block = 1 << 20, Long = 1 << 20;
 
     private readonly IncrementalHash _hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
     private readonly long? _size = inner.CanSeek ? inner.Length : null;

@@ -10,7 +10,7 @@ internal sealed class TextWindow(Utf8Text text, string file)
     public const int Slack = 16;
 
     // A short file needs little room; a long one is read in blocks that keep every core busy.
-    private const int FirstBlock = 1 << 17, Block = 4 << 20;
+    private const int FirstBlock = 1 << 17, Block = 1 << 20;
 
     private byte[] _buffer = new byte[FirstBlock + Slack];
     private int _start, _end;
@@ -51,8 +51,8 @@ internal sealed class TextWindow(Utf8Text text, string file)
             Pending.CopyTo(_buffer);
             (_start, _end) = (0, _end - _start);
         }
-        if (_end > LongestLine && Pending.IndexOf((byte)'\n') < 0)
-            throw new ImportException(file, FormattableString.Invariant($"expected lines of at most {LongestLine >> 20} MB, found a longer one. Export the capture as CSV with one sample of each channel a line."), Line);
+        if (_end > LongestLine && Pending.Length - Pending.LastIndexOf((byte)'\n') - 1 > LongestLine)
+            throw TooLong(Line + Pending.Count((byte)'\n'));
         int room = _buffer.Length - Slack - _end;
         if (room < _buffer.Length / 2 && (_buffer.Length < Block || room < Block / 4))
             Array.Resize(ref _buffer, Math.Max(2 * (_buffer.Length - Slack), 4 * FirstBlock) + Slack);
@@ -64,6 +64,11 @@ internal sealed class TextWindow(Utf8Text text, string file)
         _end += count;
         return count > 0;
     }
+
+    /// <summary>Why a line is refused that is longer than any table's.</summary>
+    /// <param name="line">Its number.</param>
+    public ImportException TooLong(long line) =>
+        new(file, FormattableString.Invariant($"expected lines of at most {LongestLine >> 20} MB, found a longer one. Export the capture as CSV with one sample of each channel a line."), line);
 
     private static bool HasLoneReturns(ReadOnlySpan<byte> text)
     {
