@@ -4,7 +4,7 @@ using ScopeReader.Levels;
 namespace ScopeReader;
 
 /// <summary>What the first stages found out about the record as a whole: later ones refuse or widen by it.</summary>
-/// <param name="Steadiness">Whether the record is one steady wave; null where there was no frequency to ask that about.</param>
+/// <param name="Steadiness">Whether the record is one steady wave; null where nobody has looked.</param>
 /// <param name="Clipped">Which ends of the converter's range cut the wave off.</param>
 public sealed record WaveFitness(Steadiness? Steadiness, ClippedEnds Clipped)
 {

@@ -15,14 +15,28 @@ public static class WaveformAnalysis
     public static IReadOnlyList<MeasuredEdge> Measure(WaveformJob job)
     {
         ArgumentNullException.ThrowIfNull(job);
-        ReadOnlySpan<double> samples = job.Waveform.Samples;
-
         if (!IsOfThisWorld(job))
         {
             job.Sheet.Refuse("out-of-range", "values or times lie beyond anything a bench can have; check the file's units and the plan's scale",
                 [.. Quantities.All.Where(q => q.Kinds.HasFlag(CaptureKinds.Waveform))]);
             return [];
         }
+        FrequencyStage stage = MeasureFrequency(job);
+        job = stage.Job;
+        job.Cancellation.ThrowIfCancellationRequested();
+
+        IReadOnlyList<MeasuredEdge> edges = EdgeAnalyser.Measure(job, stage.States, stage.Shape.Step, stage.Transitions, stage.Frequency?.Grid);
+        RingingAnalyser.Measure(job, edges);
+        job.Cancellation.ThrowIfCancellationRequested();
+        HarmonicAnalyser.Measure(job, stage.Frequency?.Primary);
+        return edges;
+    }
+
+    /// <summary>The first stages alone: shape, levels, transitions, frequency by every method, jitter and stability, widths.</summary>
+    public static FrequencyStage MeasureFrequency(WaveformJob job)
+    {
+        ArgumentNullException.ThrowIfNull(job);
+        ReadOnlySpan<double> samples = job.Waveform.Samples;
         WaveShape shape = WaveShapeAnalyser.Look(samples);
         job.Cancellation.ThrowIfCancellationRequested();
         StateLevels? states = StateLevelAnalyser.Measure(job, shape);
@@ -32,17 +46,13 @@ public static class WaveformAnalysis
         job.Cancellation.ThrowIfCancellationRequested();
 
         CrossingFrequency? crossings = CrossingFrequency.Measure(samples, transitions, low, high, noise, shape);
-        MeasuredFrequency? frequency = FrequencyAnalyser.Measure(job, shape, crossings, transitions.Count);
-        job = job with { Fitness = new WaveFitness(frequency?.Steadiness, Clipping.Look(job, shape)) };
+        MeasuredFrequency? frequency = FrequencyAnalyser.Measure(job, shape, crossings, transitions.Count, out Steadiness steadiness);
+        job = job with { Fitness = new WaveFitness(steadiness, Clipping.Look(job, shape)) };
+        FitnessFindings.Look(job, shape, crossings, frequency?.Primary.CyclesPerSample);
+        JitterAnalyser.Measure(job, crossings);
         WidthAnalyser.Measure(job, transitions, crossings, states is null ? noise / Math.Sqrt(samples.Length) : double.Hypot(states.LowUncertainty, states.HighUncertainty) / 2);
         LevelAnalyser.Measure(job, shape, noise, frequency is null ? null : 1 / frequency.Primary.CyclesPerSample);
-        job.Cancellation.ThrowIfCancellationRequested();
-
-        IReadOnlyList<MeasuredEdge> edges = EdgeAnalyser.Measure(job, states, shape.Step, transitions, frequency?.Grid);
-        RingingAnalyser.Measure(job, edges);
-        job.Cancellation.ThrowIfCancellationRequested();
-        HarmonicAnalyser.Measure(job, frequency?.Primary);
-        return edges;
+        return new FrequencyStage(job, shape, states, transitions, frequency);
     }
 
     // Squares and reciprocals of what passes here stay far inside a double.

@@ -13,5 +13,7 @@ internal static class NamedTables
     [
         new("dbc", "harmonics, distortion, noise and spurs of made sources", DbcTable.Write),
         new("trace", "spectrum traces: levels, powers, noise density, occupied bandwidth", TraceTable.Write),
+        new("bound", "primary frequency against the Cramér-Rao bound", BoundTable.Write),
+        new("template", "the same on records too long for the joint fit", BoundTable.WriteLong),
     ];
 }

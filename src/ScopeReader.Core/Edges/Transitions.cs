@@ -1,3 +1,7 @@
+using System.Numerics;
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
+
 namespace ScopeReader.Edges;
 
 /// <summary>Finds the passages of a wave from state to state.</summary>
@@ -40,20 +44,43 @@ public static class Transitions
         bool isHigh = samples[i] >= above;
         while (i < samples.Length)
         {
-            int left = i; // The last sample beyond the threshold that the wave leaves.
-            if (isHigh)
-                for (; i < samples.Length && samples[i] > below; i++)
-                    left = samples[i] >= above ? i : left;
-            else
-                for (; i < samples.Length && samples[i] < above; i++)
-                    left = samples[i] <= below ? i : left;
+            int from = i;
+            i = isHigh ? FirstAtMost(samples, i, below) : FirstAtLeast(samples, i, above);
             if (i == samples.Length)
                 break;
+            int left = i; // The last sample beyond the threshold that the wave leaves.
+            while (left > from && (isHigh ? samples[left] < above : samples[left] > below))
+                left--;
             double instant = Crossing(samples, left, i, middle);
             found.Add(new Transition(!isHigh, (int)Math.Floor(instant), instant));
             isHigh = !isHigh;
         }
         return found;
+    }
+
+    // Four samples at a time: most of a record is far from any transition.
+    private static int FirstAtMost(ReadOnlySpan<double> samples, int i, double level)
+    {
+        ref double first = ref MemoryMarshal.GetReference(samples);
+        Vector256<double> levels = Vector256.Create(level);
+        for (; i + 4 <= samples.Length; i += 4)
+            if (Vector256.LessThanOrEqual(Vector256.LoadUnsafe(ref first, (nuint)i), levels).ExtractMostSignificantBits() is var found and not 0)
+                return i + BitOperations.TrailingZeroCount(found);
+        while (i < samples.Length && samples[i] > level)
+            i++;
+        return i;
+    }
+
+    private static int FirstAtLeast(ReadOnlySpan<double> samples, int i, double level)
+    {
+        ref double first = ref MemoryMarshal.GetReference(samples);
+        Vector256<double> levels = Vector256.Create(level);
+        for (; i + 4 <= samples.Length; i += 4)
+            if (Vector256.GreaterThanOrEqual(Vector256.LoadUnsafe(ref first, (nuint)i), levels).ExtractMostSignificantBits() is var found and not 0)
+                return i + BitOperations.TrailingZeroCount(found);
+        while (i < samples.Length && samples[i] < level)
+            i++;
+        return i;
     }
 
     // From the first and from the last pair of samples that straddle the level between two samples on either side of it.

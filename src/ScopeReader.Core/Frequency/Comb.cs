@@ -5,13 +5,16 @@ namespace ScopeReader.Frequency;
 /// <summary>The lines of a periodic wave, as far as a frequency estimate is disturbed by them.</summary>
 internal sealed class Comb
 {
-    private const int FewestHarmonics = 20, MostHarmonics = 64, HighestFolded = 1000, Inspected = 1 << 17;
+    private const int FewestHarmonics = 20, MostHarmonics = 64, HighestFolded = 1000, LongestPart = 1 << 17;
     private const double MostWork = 3e7, FewestCycles = 64;
 
     private readonly HarmonicModel _model;
     private readonly int _count;
 
-    private Comb(HarmonicModel model, NoiseSpectrum noise, int count) => (_model, Noise, _count) = (model, noise, count);
+    private Comb(HarmonicModel model, NoiseSpectrum noise, int count, int inspected) => (_model, Noise, _count, Inspected) = (model, noise, count, inspected);
+
+    /// <summary>How many samples in the middle of the record the lines are fitted to.</summary>
+    public int Inspected { get; }
 
     /// <summary>The fitted lines; of a long record those in its middle.</summary>
     public HarmonicModel Model => _model;
@@ -35,14 +38,14 @@ internal sealed class Comb
         int wanted = Math.Min(most, Math.Max(atLeast, Math.Min(affordable, part.Length / 16)));
         for (int harmonics = wanted; harmonics >= atLeast && harmonics > 0; harmonics = harmonics == wanted ? atLeast : 0)
             if (HarmonicFit.At(part, fundamental, harmonics) is { } fit)
-                return new Comb(fit.Model, new NoiseSpectrum(fit.Model.Residual(part), fundamental, fit.Unknowns), samples.Length);
+                return new Comb(fit.Model, new NoiseSpectrum(fit.Model.Residual(part), fundamental, fit.Unknowns), samples.Length, part.Length);
         return null;
     }
 
     /// <summary>The middle of a long record: enough to know its lines and its noise by. Its middle is that of the record.</summary>
     public static ReadOnlySpan<double> Middle(ReadOnlySpan<double> samples, double fundamental)
     {
-        int length = (int)Math.Max(Inspected, Math.Min(samples.Length, Math.Ceiling(FewestCycles / fundamental)));
+        int length = (int)Math.Max(LongestPart, Math.Min(samples.Length, Math.Ceiling(FewestCycles / fundamental)));
         if (length >= samples.Length)
             return samples;
         length -= (samples.Length - length) % 2;

@@ -22,7 +22,7 @@ public sealed record CrossingFrequency
     private const int FewestDegreesOfFreedom = 5;
     // An edge of any shorter duration looks like one of up to 1.6 samples, by the lines between them.
     private const double Resolved = 1.8;
-    private const double SineWindow = 0.11, EdgeWindow = 0.4, LargestSpread = 0.1;
+    private const double SineWindow = 0.11, EdgeWindow = 0.4, LargestSpread = 0.1, LeftByInterpolation = 0.2;
 
     private CrossingFrequency() { }
 
@@ -34,6 +34,9 @@ public sealed record CrossingFrequency
 
     /// <summary>Rough 10 to 90 % duration of the edges, samples.</summary>
     public required double EdgeDuration { get; init; }
+
+    /// <summary>False where any shorter edge would look the same.</summary>
+    public bool IsResolved => EdgeDuration > Resolved;
 
     /// <summary>Bound of the error that interpolation leaves in one instant, samples.</summary>
     public required double InterpolationBound { get; init; }
@@ -55,6 +58,12 @@ public sealed record CrossingFrequency
 
     /// <summary>Bound of the interpolation error of one direction's mean instant, samples, where it does not average.</summary>
     public required double WidthBound { get; init; }
+
+    /// <summary>What the digitiser itself makes of one edge's timing: its noise over the slope, and what interpolation leaves; rms, samples.</summary>
+    public required double TimingFloor { get; init; }
+
+    /// <summary>The edges and their grid.</summary>
+    public required EdgeRegression Regression { get; init; }
 
     /// <summary>Edges that were left out as strays.</summary>
     public required int Outliers { get; init; }
@@ -92,7 +101,7 @@ public sealed record CrossingFrequency
         double frequency = 1 / fit.Period;
         var terms = new List<BudgetTerm>();
         if (fit.DegreesOfFreedom >= FewestDegreesOfFreedom)
-            terms.Add(BudgetTerm.Normal(fit.Spread > 2 * expected + 0.2 * bound ? "jitter" : "noise", fit.PeriodUncertainty, frequency * frequency, fit.DegreesOfFreedom));
+            terms.Add(BudgetTerm.Normal(fit.Spread > 2 * expected + LeftByInterpolation * bound ? "jitter" : "noise", fit.PeriodUncertainty, frequency * frequency, fit.DegreesOfFreedom));
         else
             terms.Add(BudgetTerm.Normal("noise", Math.Max(expected, fit.Spread) * fit.UncertaintyFactor, frequency * frequency));
         int multiple = EdgeInterpolation.CommensurateMultiple(fit.Period, samples.Length / fit.Period);
@@ -117,6 +126,9 @@ public sealed record CrossingFrequency
             FallingSlope = falling?.Slope ?? slope,
             WidthNoise = Math.Sqrt(ur * ur + uf * uf + jitter),
             WidthBound = multiple == 0 ? 0 : bound / OfHarmonic(duration, multiple),
+            // Of the fitted slope, where there is one: the rough one is that of a straight edge, and overstates the noise's part.
+            TimingFloor = double.Hypot(expected * slope / (rising?.Slope ?? falling?.Slope ?? slope), (duration > Resolved ? LeftByInterpolation : 1 / Math.Sqrt(3)) * bound),
+            Regression = fit,
             Outliers = fit.Outliers,
             Edges = edges,
         };

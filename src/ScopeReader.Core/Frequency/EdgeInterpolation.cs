@@ -20,6 +20,19 @@ public static class EdgeInterpolation
         return Math.Min(0.5, 0.1052 / (duration * duration + 0.17));
     }
 
+    /// <summary>Largest error of a band-limited fit on a Gaussian edge, samples: what the edge holds beyond half the sample rate is folded.</summary>
+    /// <param name="duration">10 to 90 % duration of the edge, samples.</param>
+    /// <remarks>
+    /// The edge's spectrum is e^(-aν²)/(2πν), a = 2π²s², s = d/2.5631. Its part beyond ν = 1/2, both signs, is e^(-a/4)/(πa/2) at most,
+    /// and over the slope 1/(s√(2π)) that is a time. Against long windowed-sinc interpolation: 0.098 for 0.069 (d = 1), 0.0052 for 0.0044 (2), 8e-5 for 6e-5 (3).
+    /// </remarks>
+    public static double LargestAliasing(double duration)
+    {
+        ArgumentOutOfRangeException.ThrowIfNegative(duration);
+        double s = duration / 2.5631, a = 2 * Math.PI * Math.PI * s * s;
+        return a > 0 ? Math.Min(0.5, s * Math.Sqrt(2 * Math.PI) * Math.Exp(-a / 4) / (Math.PI * a / 2)) : 0.5;
+    }
+
     /// <summary>Bound of the relative error that it can leave in a period by regression over <paramref name="samples"/> samples: 3 e/N.</summary>
     /// <param name="error">Largest error of one crossing, samples.</param>
     /// <param name="samples">Length of the record, samples.</param>

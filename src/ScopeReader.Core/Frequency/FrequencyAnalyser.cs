@@ -6,81 +6,46 @@ using ScopeReader.Readings;
 namespace ScopeReader.Frequency;
 
 /// <summary>Frequency by every method that suits the wave, period, and the deviation from nominal.</summary>
-/// <remarks>
-/// Primary is the method that uses most of what the wave carries: a sine fit on a sine, the edges elsewhere. The others
-/// stand beside it for comparison.
-/// </remarks>
 public static class FrequencyAnalyser
 {
     private const double Million = 1e6;
-
-    // Edges under this many samples a cycle are not told from their alias; a fallback line must agree with half the edges.
-    private const double FewestSamplesPerCycle = 4;
-    private const int FewestEdgesForLine = 8;
 
     /// <summary>Measures the frequency and writes it down, or why not.</summary>
     /// <param name="job">The waveform and where readings go.</param>
     /// <param name="shape">What the first look gave.</param>
     /// <param name="crossings">What the edges gave; null where they gave nothing.</param>
     /// <param name="edges">How many transitions there are.</param>
+    /// <param name="steadiness">Whether the record is one steady wave, also where that is why there is no frequency.</param>
     /// <returns>The primary frequency; null where there is none.</returns>
-    public static MeasuredFrequency? Measure(WaveformJob job, WaveShape shape, CrossingFrequency? crossings, int edges)
+    public static MeasuredFrequency? Measure(WaveformJob job, WaveShape shape, CrossingFrequency? crossings, int edges, out Steadiness steadiness)
     {
         ArgumentNullException.ThrowIfNull(job);
         ArgumentNullException.ThrowIfNull(shape);
-        ReadOnlySpan<double> samples = job.Waveform.Samples;
-        FrequencyEstimate? line = edges >= 3 ? InterpolatedFft.Estimate(samples) : null;
-        FrequencyEstimate? sine = null;
-        if (shape.Kind == WaveKind.Sinusoidal && (line ?? crossings?.Estimate) is { } start)
-            sine = SineFit.Estimate(samples, start.CyclesPerSample);
-        if (sine is { CyclesPerSample: > 1 / FewestSamplesPerCycle })
-            crossings = null;
-
-        (FrequencyEstimate? primary, string why) = Choose(shape, crossings?.Estimate, line, sine, edges);
-        if (primary is null)
+        FrequencyMethods found = FrequencyMethods.Of(job.Waveform.Memory, shape, crossings, edges);
+        steadiness = found.Steadiness;
+        if (found.Primary is not { } primary)
         {
             (string code, string reason) = WhyNot(shape, edges);
-            job.Sheet.Refuse(code, reason, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError);
+            job.Sheet.Refuse(code, reason, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError, Quantities.FrequencyDrift);
             return null;
         }
-        Steadiness steadiness = Comb.Find(samples, primary.CyclesPerSample) is { } comb
-            ? SteadinessCheck.Look(job.Waveform.Memory, comb, primary.CyclesPerSample, crossings)
-            : new Steadiness(SteadinessKind.Untested);
-        if (SteadinessFindings.WhyNone(job, steadiness) is { } none)
+        if (SteadinessFindings.WhyNone(job, found.Steadiness) is { } none)
         {
-            job.Sheet.Refuse(SteadinessFindings.Code, none, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError);
+            job.Sheet.Refuse(SteadinessFindings.Code, none, Quantities.Frequency, Quantities.Period, Quantities.FrequencyError, Quantities.FrequencyDrift);
             return null;
         }
-        FrequencyEstimate Widened(FrequencyEstimate estimate) => SteadinessFindings.Term(steadiness, estimate.CyclesPerSample, job.Waveform.Count) is { } term
-            ? estimate with { Terms = [.. estimate.Terms, term] } : estimate;
-        Add(job, Widened(primary), isPrimary: true, why);
-        foreach (FrequencyEstimate? other in (FrequencyEstimate?[])[crossings?.Estimate, line, sine])
-            if (other is not null && other != primary)
-            {
-                Add(job, Widened(other), isPrimary: false, note: null);
-                FrequencyFindings.Compare(job, Widened(primary), Widened(other));
-            }
-        primary = Widened(primary);
-        SteadinessFindings.Write(job, steadiness);
+        Add(job, primary, isPrimary: true, found.Why);
+        foreach (FrequencyEstimate other in found.Others)
+        {
+            Add(job, other, isPrimary: false, note: null);
+            FrequencyFindings.Compare(job, primary, other);
+        }
+        SteadinessFindings.Write(job, found.Steadiness);
         AddPeriod(job, primary);
         AddError(job, primary);
+        AddDrift(job, found.Steadiness);
         FrequencyFindings.Record(job, primary, crossings);
-        return new MeasuredFrequency(primary, steadiness, crossings?.Grid);
-    }
-
-    private static (FrequencyEstimate? Primary, string Why) Choose(WaveShape shape, FrequencyEstimate? crossings, FrequencyEstimate? line, FrequencyEstimate? sine, int edges)
-    {
-        if (sine is not null)
-            return (sine, "primary: on a sine the fit uses every sample");
-        if (crossings is not null)
-            return (crossings, shape.Kind switch
-            {
-                WaveKind.TwoState => "primary: on a two-state wave the edges carry the timing; a sine fit would leave its harmonics out",
-                WaveKind.Sinusoidal => "primary: the sine fit did not settle on this record",
-                _ => "primary: the wave is no single sine, and its crossings repeat",
-            });
-        bool agrees = line is not null && edges >= FewestEdgesForLine && edges > line.Count && edges < 4 * line.Count;
-        return agrees ? (line, "primary: the edges keep no steady period, so the strongest line stands in") : (null, "");
+        return new MeasuredFrequency(primary, found.Steadiness, crossings?.Grid);
     }
 
     /// <summary>An estimate with the chain's correction and terms.</summary>
@@ -127,6 +92,21 @@ public static class FrequencyAnalyser
             Count = estimate.Count,
             Note = $"against a nominal {(nominal / 1000).ToString("0.#########", CultureInfo.InvariantCulture)} kHz",
         });
+    }
+
+    // The timebase's own drift is in it, and nothing of its constant error.
+    private static void AddDrift(WaveformJob job, Steadiness steadiness)
+    {
+        if (!job.Waveform.Axis.IsTimed)
+            job.Sheet.Refuse("no-interval", "the file states no sample interval; give it with --interval or --rate", Quantities.FrequencyDrift);
+        else if (steadiness.Curvature is not { } curvature)
+            job.Sheet.Refuse("too-few-cycles", "too few cycles to lay the later ones beside the earlier; capture sixteen or more", Quantities.FrequencyDrift);
+        else
+            job.Sheet.Add(new Reading(Quantities.FrequencyDrift, curvature.Rate * Million / job.Waveform.Interval, "ppm/s",
+                new Budget([BudgetTerm.Normal("noise", curvature.Uncertainty * Million / job.Waveform.Interval, degreesOfFreedom: curvature.DegreesOfFreedom)]), "phase-of-parts")
+            {
+                Note = "over the record, the timebase's own in it",
+            });
     }
 
     /// <summary>Deviation from nominal in millionths.</summary>

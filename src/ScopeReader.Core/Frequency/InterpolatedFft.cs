@@ -9,14 +9,14 @@ namespace ScopeReader.Frequency;
 /// and many samples (Rife and Vincent, Bell Syst. Tech. J. 49 (1970) 197, class I; from memory).</para>
 /// <para>Uncertainty: the noise density near the tone, carried through both bins, whose noises have the correlation 2/3 that
 /// Hann gives them; and the leakage of the tone's image and of its harmonics. Standard deviation 1.6 to 2 times the bound.</para>
-/// <para>Records above 2^20 samples: the 2^20 in their middle.</para>
+/// <para>Records above 2^18 samples: the 2^18 in their middle; it is a quick view and a start value.</para>
 /// </remarks>
 public static class InterpolatedFft
 {
     /// <summary>The method's name in readings.</summary>
     public const string Method = "interpolated-fft";
 
-    private const int LongestTransform = 1 << 20, FewestSamples = 32;
+    private const int LongestTransform = 1 << 18, FewestSamples = 32;
     private const double FewestCycles = 4, NeighbourCorrelation = 2.0 / 3;
 
     /// <summary>Estimates the repetition frequency.</summary>

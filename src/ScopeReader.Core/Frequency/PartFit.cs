@@ -11,15 +11,16 @@ namespace ScopeReader.Frequency;
 /// <param name="Residual">Rms of the samples less the fit.</param>
 internal readonly record struct PartFit(double Instant, double Gain, double Phase, double GainFactor, double PhaseFactor, double Residual)
 {
-    private const int Fewest = 8;
+    private const int Fewest = 8, MostParts = 64;
+    private const double CyclesPerPart = 2;
 
-    /// <summary>Fits every part; those in which the three unknowns cannot be told apart are left out.</summary>
+    /// <summary>Fits up to 64 parts of equal length, of two cycles or more; those in which the three unknowns cannot be told apart are left out.</summary>
     /// <param name="samples">Shape [n].</param>
     /// <param name="template">One period.</param>
     /// <param name="frequency">Cycles per sample that the parts are laid on.</param>
-    /// <param name="parts">How many parts of equal length.</param>
-    public static PartFit[] Over(ReadOnlyMemory<double> samples, WaveTemplate template, double frequency, int parts)
+    public static PartFit[] Over(ReadOnlyMemory<double> samples, WaveTemplate template, double frequency)
     {
+        int parts = (int)Math.Min(MostParts, samples.Length * frequency / CyclesPerPart);
         var found = new PartFit?[parts];
         // Each part is summed on its own, so that the sums do not depend on how many cores share the work.
         void Fit(int p) => found[p] = One(samples.Span, template, frequency, (int)((long)p * samples.Length / parts), (int)((long)(p + 1) * samples.Length / parts));

@@ -21,7 +21,7 @@ public sealed record SineFit(double Frequency, double Amplitude, double Phase, d
     public const string Method = "sine-fit";
 
     private const double FewestCycles = 3;
-    private const int FewestSamples = 16, ShortRecord = 1 << 16;
+    private const int FewestSamples = 16, ShortRecord = 1 << 16, Longer = 16;
 
     /// <summary>The three-parameter fit: amplitude, phase and offset at a known frequency.</summary>
     /// <param name="samples">Shape [n].</param>
@@ -64,22 +64,19 @@ public sealed record SineFit(double Frequency, double Amplitude, double Phase, d
             (int)(frequency * count));
     }
 
-    // A start that is good enough for a short record gives one that is good enough for a record eight times as long.
+    // A start that is good enough for a short record gives one that is good enough for a record sixteen times as long; each length costs
+    // a sixteenth of the next, and the whole record is then gone through twice.
     private static HarmonicFit? Settle(ReadOnlySpan<double> samples, double start)
     {
-        if (HarmonicFit.From(samples, start, 1) is { } direct)
-            return direct;
-        HarmonicFit? fit = null;
         double frequency = start;
-        for (long length = ShortRecord; length / 8 < samples.Length && samples.Length > ShortRecord; length *= 8)
+        for (long length = ShortRecord; length < samples.Length; length *= Longer)
         {
-            int n = (int)Math.Min(length, samples.Length);
-            fit = HarmonicFit.From(samples.Slice((samples.Length - n) / 2, n), frequency, 1);
-            if (fit is null)
+            int n = (int)length;
+            if (HarmonicFit.From(samples.Slice((samples.Length - n) / 2, n), frequency, 1) is not { } fit)
                 return null;
             frequency = fit.Model.Frequency;
         }
-        return fit;
+        return HarmonicFit.From(samples, frequency, 1);
     }
 
     // Error that a tone as strong as the sine, a distance away and in phase with it at the middle, gives the fitted frequency, both in cycles a record:

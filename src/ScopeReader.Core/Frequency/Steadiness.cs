@@ -27,4 +27,7 @@ public sealed record Steadiness(SteadinessKind Kind)
 
     /// <summary>Change of frequency over the record, of the frequency, where it drifts; else 0.</summary>
     public double Drift { get; init; }
+
+    /// <summary>Change of frequency by the sample, of the frequency, by a parabola through the parts' phases; with its standard uncertainty.</summary>
+    public (double Rate, double Uncertainty, int DegreesOfFreedom)? Curvature { get; init; }
 }

@@ -9,8 +9,8 @@ namespace ScopeReader.Frequency;
 /// </remarks>
 internal sealed class SteadinessCheck
 {
-    private const int MostParts = 64, FewestParts = 5, SpoiltShare = 20;
-    private const double CyclesPerPart = 2, Significant = 5;
+    private const int FewestParts = 5, SpoiltShare = 20;
+    private const double Significant = 5;
 
     // Below these nothing is said: a table's own error, and gains that a bench source's level control leaves.
     private const double LeastPhase = 2e-5, LeastGain = 0.01, LeastTone = 0.01, AbsentGain = 0.1, MostlyDrift = 0.8, MirrorRatio = 1.4, GainPerPhase = 4;
@@ -26,17 +26,16 @@ internal sealed class SteadinessCheck
         (_parts, _phases, _frequency, _noise, _timing) = (parts, phases, frequency, noise, timing);
 
     /// <summary>Looks at a record.</summary>
-    /// <param name="samples">Shape [n].</param>
+    /// <param name="fits">Its parts.</param>
+    /// <param name="count">Samples in it.</param>
     /// <param name="comb">Its lines, fitted at the frequency.</param>
     /// <param name="frequency">Cycles per sample.</param>
     /// <param name="crossings">What the edges gave; null where they gave nothing.</param>
-    public static Steadiness Look(ReadOnlyMemory<double> samples, Comb comb, double frequency, CrossingFrequency? crossings)
+    public static Steadiness Look(PartFit[] fits, int count, Comb comb, double frequency, CrossingFrequency? crossings)
     {
-        int parts = (int)Math.Min(MostParts, samples.Length * frequency / CyclesPerPart);
         Steadiness alone = SecondTone(comb);
-        if (parts < FewestParts)
+        if (fits.Length < FewestParts)
             return alone.SecondToneRatio > 0 ? alone : new Steadiness(SteadinessKind.Untested);
-        PartFit[] fits = PartFit.Over(samples, new WaveTemplate(comb.Model), frequency, parts);
         double strongest = fits.Select(f => f.Gain).DefaultIfEmpty(0).Max();
         // Where the wave is absent, noise has some phase too.
         PartFit[] present = [.. fits.Where(f => f.Gain > AbsentGain * strongest)];
@@ -48,7 +47,7 @@ internal sealed class SteadinessCheck
         if (crossings is not null)
         {
             // What sampling does to an instant averages over the edges of a part, unless they all lie at one place between samples.
-            double edges = Math.Max(1, 2 * frequency * samples.Length / parts), bound = crossings.InterpolationBound * frequency;
+            double edges = Math.Max(1, 2 * frequency * count / fits.Length), bound = crossings.InterpolationBound * frequency;
             allowance = crossings.CommensurateMultiple > 0 ? bound : bound / Math.Sqrt(edges);
             // Jitter from edge to edge is no unsteadiness of the parts.
             timing = crossings.Grid.TimingSpread * frequency / Math.Sqrt(edges);
@@ -103,6 +102,7 @@ internal sealed class SteadinessCheck
             lost += Math.Abs(_phases[i] - _phases[i - 1]) > LostPhase ? 1 : 0;
         Steadiness found = alone with
         {
+            Curvature = Curvature(),
             PhaseExcursion = moves ? excursion : 0,
             FrequencyExcursion = moves ? Deviation(straight) : 0,
             AmplitudeRange = breathes ? range : 0,
@@ -160,6 +160,30 @@ internal sealed class SteadinessCheck
         }
         return (distances, squares / (_parts.Length - degree - 1));
     }
+
+    // The parts' own scatter is the uncertainty, whatever it comes from.
+    private (double Rate, double Uncertainty, int DegreesOfFreedom)? Curvature()
+    {
+        double reach = _parts.Max(p => Math.Abs(p.Instant)), squares = 0;
+        int freedom = _parts.Length - 3;
+        var equations = new NormalEquations(3);
+        for (int i = 0; i < _parts.Length; i++)
+            equations.Add(Row(_parts[i].Instant / reach, 2), _phases[i], Certainty(_parts[i]));
+        if (freedom < FewestParts || equations.Factor() is not { } factor)
+            return null;
+        double[] fitted = equations.Solve(factor);
+        for (int i = 0; i < _parts.Length; i++)
+        {
+            double[] row = Row(_parts[i].Instant / reach, 2);
+            double distance = _phases[i] - fitted[0] - fitted[1] * row[1] - fitted[2] * row[2];
+            squares += distance * distance * Certainty(_parts[i]);
+        }
+        // Phase a + bx + cx², x = t/reach: the frequency changes by 2c/reach² a sample.
+        double perRate = 2 / (reach * reach * _frequency);
+        return (perRate * fitted[2], perRate * Math.Sqrt(squares / freedom * equations.Covariances(factor, 2)[2]), freedom);
+    }
+
+    private static double Certainty(PartFit part) => part.Gain * part.Gain / (part.PhaseFactor * part.PhaseFactor);
 
     private static double[] Row(double x, int degree) => degree == 1 ? [1, x] : [1, x, x * x];
 

@@ -4,7 +4,7 @@ using ScopeReader.Readings;
 namespace ScopeReader.Frequency;
 
 /// <summary>What an unsteady record means for its frequency: a finding, a term of the budget, or a reason to refuse.</summary>
-internal static class SteadinessFindings
+public static class SteadinessFindings
 {
     /// <summary>The code of the finding, and of the refusal.</summary>
     public const string Code = "not-one-steady-tone";
@@ -13,7 +13,7 @@ internal static class SteadinessFindings
     private const double MostSecondTone = 0.6;
 
     /// <summary>Why the record has no one frequency; null where it has.</summary>
-    public static string? WhyNone(WaveformJob job, Steadiness found) => found switch
+    internal static string? WhyNone(WaveformJob job, Steadiness found) => found switch
     {
         { Kind: SteadinessKind.NotPeriodic } => "the record is not one steady tone: no one period describes it from start to end (a sweep, hopping, or noise); capture the source while it stands still, or a shorter record",
         { Kind: SteadinessKind.SecondTone, SecondToneRatio: > MostSecondTone } => string.Create(CultureInfo.InvariantCulture,
@@ -30,7 +30,7 @@ internal static class SteadinessFindings
     /// had; and what a phase that stays within ±ψ can do to a regression over the record, 3ψ/N. A second tone of ratio r turns
     /// the phase by asin r at most; d cycles a record from the nearest harmonic it can do 6ψ/(πd) at most.
     /// </remarks>
-    public static BudgetTerm? Term(Steadiness found, double frequency, int count)
+    internal static BudgetTerm? Term(Steadiness found, double frequency, int count)
     {
         double turned = Math.Asin(Math.Min(1, found.SecondToneRatio)) / (2 * Math.PI), order = Math.Round(found.SecondTone / frequency);
         double beats = Math.Max(1, Math.Abs(found.SecondTone - order * frequency) * count);
@@ -39,7 +39,7 @@ internal static class SteadinessFindings
     }
 
     /// <summary>Writes down in which way the record is unsteady.</summary>
-    public static void Write(WaveformJob job, Steadiness found)
+    internal static void Write(WaveformJob job, Steadiness found)
     {
         string? text = found.Kind switch
         {

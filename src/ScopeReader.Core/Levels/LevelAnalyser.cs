@@ -32,7 +32,7 @@ public static class LevelAnalyser
         }
         if (period is { } p && p >= 2 && p <= samples.Length)
         {
-            var (mean, square, periods) = WholePeriods.Average(samples, p, noise);
+            var (mean, square, periods) = WholePeriods.Average(job.Waveform.Memory, p, noise);
             // A wave that sweeps many codes dithers itself; one that rests on two does not.
             double bound = shape.Kind == WaveKind.TwoState ? StateEstimate.Quantisation(noise, shape.Step) : 0;
             // One period is cut where it ends, half a sample off at most.

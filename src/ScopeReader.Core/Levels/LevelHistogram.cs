@@ -7,7 +7,7 @@ namespace ScopeReader.Levels;
 /// </remarks>
 internal sealed class LevelHistogram
 {
-    private const int MostBins = 8192;
+    private const int MostBins = 8192, MostCounted = 1 << 20, Stretches = 64;
 
     private readonly int[] _counts;
     private readonly double _origin, _width;
@@ -23,9 +23,16 @@ internal sealed class LevelHistogram
         _origin = minimum - _width / 2;
         _counts = new int[(int)Math.Floor(range / _width + 0.5) + 1];
         double perBin = 1 / _width;
-        foreach (double value in samples)
-            _counts[Math.Min(_counts.Length - 1, (int)((value - _origin) * perBin))]++;
+        // Of a long record stretches from all over it: levels are looked for here, and not yet measured.
+        int stretches = samples.Length > MostCounted ? Stretches : 1, length = samples.Length > MostCounted ? MostCounted / Stretches : samples.Length;
+        for (int s = 0; s < stretches; s++)
+            foreach (double value in samples.Slice(stretches == 1 ? 0 : (int)((long)s * (samples.Length - length) / (stretches - 1)), length))
+                _counts[Math.Clamp((int)((value - _origin) * perBin), 0, _counts.Length - 1)]++;
+        Counted = (long)stretches * length;
     }
+
+    /// <summary>How many samples were counted.</summary>
+    public long Counted { get; }
 
     /// <summary>Number of bins.</summary>
     public int Bins => _counts.Length;

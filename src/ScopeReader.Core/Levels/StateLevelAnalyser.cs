@@ -11,6 +11,7 @@ namespace ScopeReader.Levels;
 public static class StateLevelAnalyser
 {
     private const string Method = "shorth";
+    private const double MiddleShare = 0.2, MostApart = 3;
 
     /// <summary>Measures the levels and writes them down, or why not.</summary>
     /// <param name="job">The waveform and where readings go.</param>
@@ -41,7 +42,18 @@ public static class StateLevelAnalyser
         });
         var levels = new StateLevels(settings.Low ?? low.Level, settings.High ?? high.Level,
             settings.Low is null ? low.Uncertainty : 0, settings.High is null ? high.Uncertainty : 0, noise);
-        return levels.High > levels.Low ? levels : null;
+        if (levels.High > levels.Low && !Misses(settings, low.Level, high.Level))
+            return levels;
+        job.Sheet.Add(new Finding("levels-off-the-wave",
+            $"the plan's levels, {Engineering.Format(levels.Low, job.Waveform.Unit)} and {Engineering.Format(levels.High, job.Waveform.Unit)}, do not belong to this wave, whose states lie at {Engineering.Format(low.Level, job.Waveform.Unit)} and {Engineering.Format(high.Level, job.Waveform.Unit)}: edges are read at the wave's own; check the probe's factor, the plan's scale, or [levels]"));
+        return new StateLevels(low.Level, high.Level, low.Uncertainty, high.Uncertainty, noise);
+    }
+
+    // Stated levels whose middle the wave hardly passes, or that are several times as far apart as its own or as near together.
+    private static bool Misses(LevelSettings settings, double low, double high)
+    {
+        double below = settings.Low ?? low, above = settings.High ?? high, middle = (below + above) / 2, swing = high - low;
+        return middle < low + MiddleShare * swing || middle > high - MiddleShare * swing || above - below > MostApart * swing || above - below < swing / MostApart;
     }
 
     /// <summary>Whether the samples clear of the edges bear the two levels out: of a sine with few samples a cycle they don't.</summary>

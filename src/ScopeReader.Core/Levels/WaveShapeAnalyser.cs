@@ -1,3 +1,5 @@
+using System.Runtime.InteropServices;
+using System.Runtime.Intrinsics;
 using ScopeReader.Edges;
 using ScopeReader.Frequency;
 
@@ -18,9 +20,7 @@ public static class WaveShapeAnalyser
     /// <param name="samples">Shape [n], any unit, n of 1 or more.</param>
     public static WaveShape Look(ReadOnlySpan<double> samples)
     {
-        double minimum = double.PositiveInfinity, maximum = double.NegativeInfinity;
-        foreach (double value in samples)
-            (minimum, maximum) = (Math.Min(minimum, value), Math.Max(maximum, value));
+        (double minimum, double maximum) = Range(samples);
         if (minimum == maximum)
             return new WaveShape(WaveKind.Flat, minimum, maximum, 0, minimum, maximum, 0);
 
@@ -47,7 +47,7 @@ public static class WaveShapeAnalyser
 
         double swing = high - low, near = Math.Max(0.6 * step, Math.Clamp(2.5 * noise, 0.1 * swing, 0.3 * swing));
         double onLow = histogram.Between(low - near, low + near), onHigh = histogram.Between(high - near, high + near);
-        double onStates = (onLow + onHigh) / samples.Length, between = (double)histogram.Between(low + swing / 3, high - swing / 3) / samples.Length;
+        double onStates = (onLow + onHigh) / histogram.Counted, between = (double)histogram.Between(low + swing / 3, high - swing / 3) / histogram.Counted;
         bool twoStates = swing > LeastSeparation * scatter && Math.Min(onLow, onHigh) >= FewestOnState
             && (onStates >= MostlyNear || (onStates >= LargelyNear && between <= SeldomBetween));
         if (twoStates && swing < FewCodes * step && TogglesLikeNoise(samples, low, high, noise, onHigh / (onLow + onHigh)))
@@ -57,6 +57,24 @@ public static class WaveShapeAnalyser
         return SineCheck.FitLine(samples) is { } fast
             ? new WaveShape(WaveKind.Sinusoidal, minimum, maximum, step, fast.Offset - fast.Amplitude, fast.Offset + fast.Amplitude, fast.Noise)
             : new WaveShape(WaveKind.Other, minimum, maximum, step, minimum, maximum, noise);
+    }
+
+    private static (double Minimum, double Maximum) Range(ReadOnlySpan<double> samples)
+    {
+        Vector256<double> least = Vector256.Create(samples[0]), most = least;
+        ref double first = ref MemoryMarshal.GetReference(samples);
+        int i = 0;
+        for (; i + 4 <= samples.Length; i += 4)
+        {
+            Vector256<double> four = Vector256.LoadUnsafe(ref first, (nuint)i);
+            (least, most) = (Vector256.Min(least, four), Vector256.Max(most, four));
+        }
+        double minimum = samples[0], maximum = samples[0];
+        for (int k = 0; k < 4; k++)
+            (minimum, maximum) = (Math.Min(minimum, least[k]), Math.Max(maximum, most[k]));
+        for (; i < samples.Length; i++)
+            (minimum, maximum) = (Math.Min(minimum, samples[i]), Math.Max(maximum, samples[i]));
+        return (minimum, maximum);
     }
 
     // Noise about a level between two codes looks like two states. It toggles 2p(1 - p) times a sample, p the share of the upper code,

@@ -8,14 +8,15 @@ namespace ScopeReader.Levels;
 /// </remarks>
 internal static class WholePeriods
 {
-    private const int Blocks = 8, FewestForBlocks = 16;
+    private const int Blocks = 8, FewestForBlocks = 16, FewestForThreads = 1 << 18;
 
     /// <summary>Mean and mean square, each with its standard uncertainty.</summary>
-    /// <param name="samples">Shape [n].</param>
+    /// <param name="memory">Shape [n].</param>
     /// <param name="period">The period, samples, at most n.</param>
     /// <param name="noise">Rms noise of one sample, for short records.</param>
-    public static (Estimate Mean, Estimate Square, int Periods) Average(ReadOnlySpan<double> samples, double period, double noise)
+    public static (Estimate Mean, Estimate Square, int Periods) Average(ReadOnlyMemory<double> memory, double period, double noise)
     {
+        ReadOnlySpan<double> samples = memory.Span;
         int periods = (int)Math.Floor(samples.Length / period);
         // About the middle of the record's values: squares of a large offset would cost digits.
         double shift = samples[0];
@@ -28,12 +29,18 @@ internal static class WholePeriods
 
         int perBlock = periods / Blocks;
         double[] means = new double[Blocks], squares = new double[Blocks];
-        for (int b = 0; b < Blocks; b++)
+        void One(int b)
         {
-            int start = (int)((long)b * samples.Length / Blocks);
-            (double mean, double square, _) = Block(samples, start, perBlock, period, shift);
+            int start = (int)((long)b * memory.Length / Blocks);
+            (double mean, double square, _) = Block(memory.Span, start, perBlock, period, shift);
             (means[b], squares[b]) = (shift + mean, square + 2 * shift * mean + shift * shift);
         }
+        // Each block on its own, so that the sums do not depend on how many cores share the work.
+        if (memory.Length > FewestForThreads)
+            Parallel.For(0, Blocks, One);
+        else
+            for (int b = 0; b < Blocks; b++)
+                One(b);
         return (OfBlocks(means), OfBlocks(squares), perBlock * Blocks);
     }
 

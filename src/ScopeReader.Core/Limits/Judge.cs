@@ -25,7 +25,12 @@ public static class Judge
         var verdicts = new List<Verdict>();
         foreach (Limit limit in plan.Limits)
             if ((limit.Channel ?? plan.Channel ?? channel.Name) == channel.Name)
-                verdicts.Add(Limit(limit, kind, sheet));
+                verdicts.Add(limit.Against(plan.Nominal) is { } absolute
+                    ? Limit(absolute, kind, sheet)
+                    : new Verdict(limit, VerdictOutcome.NotMeasured, null, null, "the limit is relative to a nominal frequency that nobody stated; add nominal to the plan, or give --nominal"));
+        foreach (Verdict verdict in verdicts)
+            if (Prospect.TooTight(verdict) is { } warning)
+                sheet.Add(new Finding("limit-too-tight", warning, verdict.Limit.Quantity.Id));
         verdicts.AddRange(lines);
         return verdicts;
     }
@@ -73,7 +78,7 @@ public static class Judge
             return new Verdict(limit, VerdictOutcome.Pass, reading, probability, "inside the limit by the guard band or more");
         if (value < low - guard || value > high + guard)
             return new Verdict(limit, VerdictOutcome.Fail, reading, probability, "beyond the limit by more than the guard band");
-        return new Verdict(limit, VerdictOutcome.Undecided, reading, probability, WhatWouldDecide(budget, value, low, high, limit.Guard, guard));
+        return new Verdict(limit, VerdictOutcome.Undecided, reading, probability, Prospect.OfDecision(reading, low, high, limit.Guard));
     }
 
     // A channel of a file without units is taken in the limit's.
@@ -81,20 +86,4 @@ public static class Judge
 
     private static string Unstated(Budget budget) =>
         "not stated in the plan: " + string.Join(", ", budget.Missing.Select(name => $"{name} (add {PlanKeys.For(name)} to {PlanKeys.TableOf(name)})"));
-
-    // A longer record shrinks the capture's own part only.
-    private static string WhatWouldDecide(Budget budget, double value, double low, double high, double factor, double guard)
-    {
-        if (2 * guard > high - low)
-            return "the limit is narrower than twice the guard band: no value could pass with this chain";
-        BudgetTerm largest = budget.Terms.MaxBy(t => t.Contribution)!;
-        double distance = Math.Min(Math.Abs(value - low), Math.Abs(high - value));
-        double chainOnly = new Budget(budget.Terms.Where(t => t.OfChain)).ExpandedUncertainty * factor;
-        if (largest.OfChain && chainOnly > distance)
-            return $"within the guard band, and {largest.Name} alone is too uncertain: a longer record will not decide it, a {Remedy(largest.Name)} would";
-        return $"within the guard band; most of it is {largest.Name}: a longer record, or several, would decide it";
-    }
-
-    private static string Remedy(string term) =>
-        term.StartsWith("timebase", StringComparison.Ordinal) ? "better or calibrated timebase" : "better or calibrated chain";
 }

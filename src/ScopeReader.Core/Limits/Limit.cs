@@ -44,4 +44,19 @@ public sealed record Limit
 
     /// <summary>Judges this channel only; null for every channel of the kind.</summary>
     public string? Channel { get; init; }
+
+    /// <summary>True where the bounds are millionths from nominal, of a frequency or a period.</summary>
+    public bool IsRelative { get; init; }
+
+    /// <summary>The same limit in the quantity's own unit; null where it is relative and there is no nominal.</summary>
+    /// <param name="nominal">Nominal frequency, Hz; null for none.</param>
+    public Limit? Against(double? nominal)
+    {
+        if (!IsRelative)
+            return this;
+        if (nominal is not { } frequency)
+            return null;
+        double centre = Quantity == Quantities.Period ? 1 / frequency : frequency;
+        return new Limit(Quantity, centre * (1 + Low * 1e-6), centre * (1 + High * 1e-6)) { Rule = Rule, Guard = Guard, Channel = Channel };
+    }
 }

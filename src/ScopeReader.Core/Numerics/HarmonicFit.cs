@@ -8,6 +8,8 @@ namespace ScopeReader.Numerics;
 /// </remarks>
 public sealed class HarmonicFit
 {
+    private const double LastStep = 1e-4;
+
     private readonly Cholesky _normal;
 
     private HarmonicFit(HarmonicModel model, Cholesky normal, bool frequencyKnown, double restSquares) =>
@@ -58,7 +60,8 @@ public sealed class HarmonicFit
             if (fit is null)
                 return null;
             double moved = fit.Model.Frequency - frequency;
-            if (Math.Abs(moved) < 1e-9 / n)
+            // Steps shrink as their squares: the next would be under 1e-8 cycles a record.
+            if (Math.Abs(moved) < LastStep / (n * harmonics))
                 return fit;
             // Further than this the linear form says nothing: go part of the way.
             frequency += Math.Clamp(moved, -0.3 / n, 0.3 / n);

@@ -16,6 +16,8 @@ public static class Engineering
     {
         if (value == 0)
             return Join("0", "", unit);
+        if (IsSmallNumber(value, unit))
+            return WithPower(value, SmallPower(value), digits - 1 - Magnitude(Scale(value, SmallPower(value)), digits));
         int power = PowerOf(value, unit, digits);
         double scaled = Scale(value, power);
         if (!IsPlain(Magnitude(scaled, digits), unit))
@@ -53,12 +55,20 @@ public static class Engineering
         if (!(uncertainty > 0) || !double.IsFinite(uncertainty))
         {
             int own = value == 0 ? 0 : PowerOf(value, unit, 6);
+            if (value != 0 && IsSmallNumber(value, unit))
+                return (Format(value, unit, 6), "", unit);
             double alone = Scale(value, own);
             if (value != 0 && !IsPlain(Magnitude(alone, 6), unit))
                 return (Exponential(value, 6), "", unit);
             return (value == 0 ? "0" : Fixed(alone, 5 - Magnitude(alone, 6)), "", Prefix(own) + unit);
         }
-        int power = PowerOf(Math.Max(Math.Abs(value), uncertainty), unit, 15);
+        double larger = Math.Max(Math.Abs(value), uncertainty);
+        if (IsSmallNumber(larger, unit))
+        {
+            int small = SmallPower(larger), places = 1 - Magnitude(Scale(uncertainty, small), 2);
+            return (WithPower(value, small, places), WithPower(uncertainty, small, places), unit);
+        }
+        int power = PowerOf(larger, unit, 15);
         double spread = Scale(uncertainty, power);
         int decimals = 1 - Magnitude(spread, 2);
         // As many digits of the value as reach down to the last of the uncertainty.
@@ -77,6 +87,12 @@ public static class Engineering
         int at = text.IndexOf('E');
         return $"{text[..at]}e{int.Parse(text.AsSpan(at + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture)}";
     }
+    // A plain number has no prefix, and a row of zeros is not read: 23.2e-6.
+    private static bool IsSmallNumber(double value, string unit) => unit == "1" && Math.Abs(value) is >= 1e-30 and < 1e-3;
+
+    private static int SmallPower(double value) => Math.Max(-BasePrefix, (int)Math.Floor(Magnitude(value, 4) / 3.0));
+
+    private static string WithPower(double value, int power, int decimals) => string.Create(CultureInfo.InvariantCulture, $"{Fixed(Scale(value, power), decimals)}e{3 * power}");
 
     private static string Prefix(int power) => power == 0 ? "" : Prefixes[power + BasePrefix].ToString();
 

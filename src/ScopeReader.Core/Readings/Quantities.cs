@@ -25,6 +25,23 @@ public static class Quantities
     /// <summary>Period of the wave.</summary>
     public static Quantity Period { get; } = new("period", "s", "time from one transition to the next of the same direction, mean over the record", Ieee181, Waveform);
 
+    private const string Jittery = "terms differ between authors; the definition is printed with the value";
+
+    /// <summary>Period jitter.</summary>
+    public static Quantity PeriodJitter { get; } = new("period-jitter", "s", "standard deviation of the periods between edges of one direction, the digitiser's own part taken off", Jittery, Waveform);
+
+    /// <summary>Cycle-to-cycle jitter.</summary>
+    public static Quantity CycleToCycleJitter { get; } = new("cycle-to-cycle-jitter", "s", "rms difference of neighbouring periods, the digitiser's own part taken off", Jittery, Waveform);
+
+    /// <summary>Time-interval error.</summary>
+    public static Quantity TimeIntervalError { get; } = new("time-interval-error", "s", "largest less smallest distance of n edges of one direction from a steady period", Jittery, Waveform);
+
+    /// <summary>Drift of the frequency.</summary>
+    public static Quantity FrequencyDrift { get; } = new("frequency-drift", "ppm/s", "change of frequency with time over the record, of the frequency", "parabola through the phases of the record's parts", Waveform);
+
+    /// <summary>Allan deviation.</summary>
+    public static Quantity AllanDeviation { get; } = new("allan-deviation", "1", "Allan deviation of the frequency at the stated averaging time, overlapping", "NIST SP 1065 (2008)", Waveform);
+
     /// <summary>Duty factor.</summary>
     public static Quantity DutyFactor { get; } = new("duty-factor", "%", "time above the 50 % reference level over the period", Ieee181, Waveform);
 
@@ -178,7 +195,7 @@ public static class Quantities
     /// <summary>Every quantity that this program measures.</summary>
     public static IReadOnlyList<Quantity> All { get; } =
     [
-        Frequency, FrequencyError, Period, DutyFactor,
+        Frequency, FrequencyError, Period, PeriodJitter, CycleToCycleJitter, TimeIntervalError, FrequencyDrift, AllanDeviation, DutyFactor,
         HighLevel, LowLevel, Amplitude, PeakToPeak, Mean, Rms,
         RiseTime, FallTime, RiseSlew, FallSlew, RiseOvershoot, FallOvershoot, RiseUndershoot, FallUndershoot,
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,

@@ -6,6 +6,8 @@ namespace ScopeReader.Files.Plans;
 /// <summary>Reads one [[limit]] of a plan.</summary>
 internal static class LimitReader
 {
+    private static readonly string[] Bounds = ["low", "high"];
+
     public static Limit Read(PlanSection section, Plan plan, string file)
     {
         var values = new Dictionary<string, PlanValue>(StringComparer.Ordinal);
@@ -18,7 +20,9 @@ internal static class LimitReader
         Quantity quantity = Quantities.Find(named.Text()) ?? throw named.Unknown("quantity", named.Text(), Quantities.All.Select(q => q.Id));
         CheckHarmonic(quantity, named, plan);
 
-        double? low = values.GetValueOrDefault("low")?.Amount(quantity.Unit), high = values.GetValueOrDefault("high")?.Amount(quantity.Unit);
+        bool relative = IsRelative(quantity, values);
+        string unit = relative ? "ppm" : quantity.Unit;
+        double? low = values.GetValueOrDefault("low")?.Amount(unit), high = values.GetValueOrDefault("high")?.Amount(unit);
         if (low is null && high is null)
             throw new PlanException(file, section.Line, $"this limit on {quantity} has no bound; add low or high");
         if (low > high)
@@ -28,7 +32,20 @@ internal static class LimitReader
             Rule = values.GetValueOrDefault("rule")?.Choice(("guarded", DecisionRule.Guarded), ("simple", DecisionRule.Simple)) ?? DecisionRule.Guarded,
             Guard = values.GetValueOrDefault("guard")?.Amount("1", 0) ?? 1,
             Channel = values.GetValueOrDefault("channel")?.Text(),
+            IsRelative = relative,
         };
+    }
+
+    // "-50 ppm" of a frequency or a period is meant from nominal; both bounds are then.
+    private static bool IsRelative(Quantity quantity, Dictionary<string, PlanValue> values)
+    {
+        if (quantity != Quantities.Frequency && quantity != Quantities.Period)
+            return false;
+        PlanValue[] bounds = [.. Bounds.Select(values.GetValueOrDefault).OfType<PlanValue>()];
+        bool[] relative = [.. bounds.Select(b => PlanUnits.UnitOf(b.Text()) is "ppm" or "%" or "ppb")];
+        if (relative.Distinct().Count() > 1)
+            throw bounds[1].Wrong($"one bound is relative to nominal and the other is not; write both in ppm, or both in {quantity.Unit}");
+        return relative.Length > 0 && relative[0];
     }
 
     // A harmonic that nobody looks for would leave its limit unanswered for ever.

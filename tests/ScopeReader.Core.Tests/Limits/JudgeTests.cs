@@ -73,20 +73,77 @@ public class JudgeTests
         Assert.Equal("on the value as indicated: not stated in the plan: timebase (add timebase-tolerance to [chain])", verdict.Reason);
     }
 
-    [Fact]
-    public void A_timebase_that_is_too_loose_is_named_as_what_to_improve()
-    {
-        var reading = new Reading(Quantities.FrequencyError, 40, "ppm",
-            new Budget([BudgetTerm.Normal("noise", 0.1), BudgetTerm.Rectangular("timebase", 25, ofChain: true)]), "crossings");
+    private static Reading Loose(double value) => new(Quantities.FrequencyError, value, "ppm",
+        new Budget([BudgetTerm.Normal("noise", 0.1), BudgetTerm.Rectangular("timebase", 25, ofChain: true)]), "crossings")
+    { Count = 200 };
 
-        Assert.Equal("within the guard band, and timebase alone is too uncertain: a longer record will not decide it, a better or calibrated timebase would",
-            Judge.Reading(Within(50), reading).Reason);
+    // Closed form: 10 ppm from the bound, and no noise left in a long record: 0.95 of a rectangle's half-width a is to be 10 ppm,
+    // and its standard uncertainty a/√3 = 10/0.95/√3 = 6.08 ppm.
+    [Fact]
+    public void A_timebase_that_is_too_loose_is_named_with_what_it_would_have_to_be() =>
+        Assert.Equal("within the guard band, and timebase alone is too uncertain: no longer record will decide it; a timebase calibrated to a standard uncertainty of 6.1 ppm (scopereader calibrate, with a reference at least as good) would",
+            Judge.Reading(Within(50), Loose(40)).Reason);
+
+    // Closed form: u = 1 ppm, 1 ppm from the bound: 1.96 u is to be 1 ppm, so u is to fall by 1.96, which takes 1.96^(2/3) = 1.57 times
+    // the record in a frequency: its 100 cycles become 157.
+    [Fact]
+    public void A_record_that_is_too_short_is_named_with_its_cycles()
+    {
+        Reading reading = new(Quantities.FrequencyError, 19, "ppm", new Budget([BudgetTerm.Normal("noise", 1)]), "sine-fit") { Count = 100 };
+
+        Assert.Equal("within the guard band; a record 1.6 times as long (about 157 cycles), otherwise as it is, would decide it", Judge.Reading(Within(20), reading).Reason);
     }
 
     [Fact]
-    public void A_limit_narrower_than_its_guard_bands_says_that_nothing_could_pass() =>
-        Assert.Equal("the limit is narrower than twice the guard band: no value could pass with this chain",
-            Judge.Reading(Within(1), Ppm(0, 1)).Reason);
+    public void An_unsteady_source_is_named_before_the_record()
+    {
+        Reading reading = new(Quantities.FrequencyError, 19, "ppm", new Budget([BudgetTerm.Normal("noise", 0.1), BudgetTerm.Rectangular("unsteadiness", 5)]), "sine-fit");
+
+        Assert.Equal("within the guard band, and unsteadiness does not fall with a longer record: steady the source first", Judge.Reading(Within(20), reading).Reason);
+    }
+
+    // ±24 ppm of the timebase (0.95 · 25 ppm) against a limit 40 ppm wide: 2 · 23.75 = 47.5 ppm is more.
+    [Fact]
+    public void A_limit_that_the_chain_can_never_decide_is_warned_of()
+    {
+        var sheet = new ReadingSheet();
+        sheet.Add(Loose(0));
+        Judge.Channel(new Plan { Limits = [Within(20)] }, new Waveform("A", "V", TimeAxis.PerSample, [0, 1]), sheet);
+
+        Assert.Equal("the limit on frequency-error is 40.0 ppm wide, and the chain alone leaves ±24 ppm: no capture with this chain can pass it; widen the limit, or have the chain calibrated",
+            sheet.Findings.Single(f => f.Code == "limit-too-tight").Text);
+    }
+
+    // 455 kHz ± 50 ppm is 455 kHz ± 22.75 Hz.
+    [Theory]
+    [InlineData(455022, VerdictOutcome.Pass)]
+    [InlineData(455023, VerdictOutcome.Fail)]
+    public void A_limit_relative_to_nominal_is_one_in_hertz(double value, VerdictOutcome expected)
+    {
+        var limit = new Limit(Quantities.Frequency, -50, 50) { IsRelative = true, Rule = DecisionRule.Simple };
+        var sheet = new ReadingSheet();
+        sheet.Add(new Reading(Quantities.Frequency, value, "Hz", new Budget([BudgetTerm.Normal("noise", 0.1)]), "crossings"));
+        Verdict verdict = Assert.Single(Judge.Channel(new Plan { Nominal = 455e3, Limits = [limit] }, new Waveform("A", "V", TimeAxis.PerSample, [0, 1]), sheet));
+
+        Assert.Equal(expected, verdict.Outcome);
+        Assert.Equal(455022.75, verdict.Limit.High!.Value, 1e-6);
+    }
+
+    [Fact]
+    public void A_relative_limit_needs_a_nominal() =>
+        Assert.Equal("the limit is relative to a nominal frequency that nobody stated; add nominal to the plan, or give --nominal",
+            Assert.Single(Judge.Channel(new Plan { Limits = [new Limit(Quantities.Frequency, -50, 50) { IsRelative = true }] }, new Waveform("A", "V", TimeAxis.PerSample, [0, 1]), new ReadingSheet())).Reason);
+
+    // C17: guard band U at k = 2, limit 20 ppm, U = 2.4 ppm: acceptance to 17.6; C18: at k = 2 the probability there is 0.97725.
+    [Fact]
+    public void The_acceptance_limit_and_its_probability_are_those_of_the_published_example()
+    {
+        var limit = new Limit(Quantities.FrequencyError, null, 20) { Guard = 2.4 / (1.959963984540054 * 1.2) };
+
+        Assert.Equal(VerdictOutcome.Pass, Judge.Reading(limit, Ppm(17.6 - 1e-9, 1.2)).Outcome);
+        Assert.Equal(VerdictOutcome.Undecided, Judge.Reading(limit, Ppm(17.6 + 1e-9, 1.2)).Outcome);
+        Assert.Equal(0.977249868051821, Judge.Reading(limit, Ppm(17.6, 1.2)).Probability!.Value, 1e-9);
+    }
 
     [Fact]
     public void A_wider_guard_band_takes_more_proof() =>
