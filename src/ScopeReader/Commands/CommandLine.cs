@@ -23,6 +23,7 @@ internal static class CommandLine
         InspectVerb.Create,
         CompareVerb.Create,
         SeriesVerb.Create,
+        CalibrateVerb.Create,
         ArchiveVerb.Create,
         ExplainVerb.Create,
     ];

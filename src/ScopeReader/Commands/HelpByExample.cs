@@ -32,6 +32,7 @@ internal sealed class HelpByExample(Surroundings surroundings) : SynchronousComm
             "scopereader series a.csv b.csv c.csv --against supply --at 4.5V,5V,5.5V --nominal 455kHz --within 20ppm",
             "scopereader series --subject 'IF source*' --against load-capacitance",
         ],
+        ["calibrate"] = ["scopereader calibrate reference.csv --reference 10MHz --reference-uncertainty 0.01ppm", "scopereader calibrate reference.csv --reference 10MHz --reference-uncertainty 0.01ppm --into source.toml"],
         ["archive"] = [$"scopereader archive add {Source} --plan {Plan}", "scopereader archive find --where 'frequency-error > 20 ppm'", "scopereader archive verify"],
         ["add"] = [$"scopereader archive add {Source} --plan {Plan} --set supply=5V --tag soldered"],
         ["find"] = ["scopereader archive find --subject 'IF source*' --where '|frequency-error| > 20 ppm'", "scopereader archive find --since 2026-01-01 --verdict fail --json"],
