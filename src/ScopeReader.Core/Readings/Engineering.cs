@@ -87,6 +87,7 @@ public static class Engineering
         int at = text.IndexOf('E');
         return $"{text[..at]}e{int.Parse(text.AsSpan(at + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture)}";
     }
+
     // A plain number has no prefix, and a row of zeros is not read: 23.2e-6.
     private static bool IsSmallNumber(double value, string unit) => unit == "1" && Math.Abs(value) is >= 1e-30 and < 1e-3;
 
