@@ -26,7 +26,7 @@ public static class WaveformAnalysis
         job.Cancellation.ThrowIfCancellationRequested();
 
         IReadOnlyList<MeasuredEdge> edges = EdgeAnalyser.Measure(job, stage.States, stage.Shape.Step, stage.Transitions, stage.Frequency?.Grid);
-        RingingAnalyser.Measure(job, edges);
+        RingingAnalyser.Measure(job, edges, stage.Transitions);
         job.Cancellation.ThrowIfCancellationRequested();
         HarmonicAnalyser.Measure(job, stage.Frequency?.Primary);
         return edges;

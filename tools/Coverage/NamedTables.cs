@@ -11,6 +11,7 @@ internal static class NamedTables
 {
     public static IReadOnlyList<NamedTable> All { get; } =
     [
+        new("kinds", "what made oscillations are called: the confusion matrix", KindTable.Write),
         new("dbc", "harmonics, distortion, noise and spurs of made sources", DbcTable.Write),
         new("trace", "spectrum traces: levels, powers, noise density, occupied bandwidth", TraceTable.Write),
         new("bound", "primary frequency against the Cramér-Rao bound", BoundTable.Write),

@@ -6,7 +6,7 @@ namespace ScopeReader.Comparing;
 /// <summary>What differences say, in the words of the bench.</summary>
 internal static class ComparisonFindings
 {
-    private const string Rise = "rise-", Fall = "fall-";
+    private const string Rise = "rise-", Fall = "fall-", KindCode = "ringing-kind";
 
     // Standard uncertainties by which two edges must part before it is worth a sentence.
     private const double Clearly = 4;
@@ -28,7 +28,7 @@ internal static class ComparisonFindings
     public static IEnumerable<Finding> Of(ChannelPair pair, IReadOnlyList<Difference> differences, IReadOnlyList<EdgeOverlay> edges, bool isOneOfSeveral)
     {
         string where = isOneOfSeveral ? $"{pair.File}: " : "";
-        var findings = new List<Finding?> { Ringing(pair, differences), Changed(differences), Verdicts(pair), Apart(edges), Unchanged(differences) };
+        var findings = new List<Finding?> { Kind(pair), Ringing(pair, differences), Changed(differences), Verdicts(pair), Apart(edges), Unchanged(differences) };
         return findings.OfType<Finding>().Select(f => f with { Text = where + f.Text });
     }
 
@@ -40,6 +40,13 @@ internal static class ComparisonFindings
             ? "a marked quantity differs by more than the noise of these two captures; probe placement is not included. Take the probe off, put it back and capture again; give such repeats with --with."
             : string.Create(CultureInfo.InvariantCulture, $"reproducibility of {reference.Captures.Count} and {sides[0].Captures.Count} captures is in the differences: probe placement is included as far as the probe was put back between them.");
         return new Finding("scope", text + (isSameChain ? " The chain's own errors are shared and cancel." : " The two chains' errors are in the differences."));
+    }
+
+    private static Finding? Kind(ChannelPair pair)
+    {
+        Finding? before = pair.Reference[0].Findings.FirstOrDefault(f => f.Code == KindCode), after = pair.Compared[0].Findings.FirstOrDefault(f => f.Code == KindCode);
+        return before is null || after is null || before.Value == after.Value ? null
+            : new Finding("kind-changed", $"the oscillation is of another kind than the reference's: {after.Value} where it was {before.Value}", after.Value);
     }
 
     private static Finding? Ringing(ChannelPair pair, IReadOnlyList<Difference> differences)

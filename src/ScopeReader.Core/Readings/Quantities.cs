@@ -133,6 +133,12 @@ public static class Quantities
     /// <summary>Resistance that damps the ringing.</summary>
     public static Quantity DampingResistance { get; } = new("damping-resistance", "ohm", "resistance to add in series for a damping ratio of 0.5", "2 z sqrt(L/C)", Waveform);
 
+    /// <summary>Frequency of an oscillation of its own.</summary>
+    public static Quantity OscillationFrequency { get; } = new("oscillation-frequency", "Hz", "frequency of an oscillation that no edge starts, on the levels of a two-state wave", Common, Waveform);
+
+    /// <summary>Level of an oscillation of its own.</summary>
+    public static Quantity OscillationLevel { get; } = new("oscillation-level", "V", "rms of an oscillation that no edge starts, on the levels where it is", Common, Waveform);
+
     /// <summary>Level of the fundamental.</summary>
     public static Quantity FundamentalLevel { get; } = new("fundamental-level", "dBV", "rms level of the fundamental, relative to 1 V", Common, Waveform);
 
@@ -200,6 +206,7 @@ public static class Quantities
         RiseTime, FallTime, RiseSlew, FallSlew, RiseOvershoot, FallOvershoot, RiseUndershoot, FallUndershoot,
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,
         RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude, RingingInductance, RingingCapacitance, DampingResistance,
+        OscillationFrequency, OscillationLevel,
         FundamentalLevel, FundamentalPower, .. HarmonicTable, WorstHarmonic, Thd, ThdR, Sinad, Enob, Sfdr, NoiseFloor,
         PeakFrequency, PeakPower, PeakLevel, Bandwidth3Db, Bandwidth6Db, Bandwidth60Db, OccupiedBandwidth, ChannelPower, NoiseDensity, LimitLineMargin,
     ];

@@ -16,35 +16,38 @@ public static class RingingAnalyser
     private static readonly Quantity[] All =
         [Quantities.RingingFrequency, Quantities.RingingDampingRatio, Quantities.RingingQ, Quantities.RingingDecayTime, Quantities.RingingAmplitude, .. LoopAnalyser.All];
 
-    /// <summary>Measures the ringing after the edges.</summary>
+    /// <summary>Measures the ringing after the edges, and what oscillates without them.</summary>
     /// <param name="job">The job.</param>
     /// <param name="edges">The averaged edges, as <see cref="EdgeAnalyser"/> gives them.</param>
-    public static void Measure(WaveformJob job, IReadOnlyList<MeasuredEdge> edges)
+    /// <param name="transitions">All transitions, in order of time.</param>
+    public static void Measure(WaveformJob job, IReadOnlyList<MeasuredEdge> edges, IReadOnlyList<Transition> transitions)
     {
         ArgumentNullException.ThrowIfNull(job);
         ArgumentNullException.ThrowIfNull(edges);
-        if (edges.Count == 0)
-        {
-            job.Sheet.Refuse("no-edge", "there is no edge that could have set anything ringing", All);
-            return;
-        }
-        bool isPrimary = true;
+        ArgumentNullException.ThrowIfNull(transitions);
+        var ringing = new List<(MeasuredEdge Edge, EdgeRinging Ringing)>();
         foreach (MeasuredEdge edge in edges)
         {
             job.Cancellation.ThrowIfCancellationRequested();
-            if (EdgeRinging.Find(edge) is not { } ringing)
-                continue;
-            Report(job, edge, ringing, isPrimary);
-            if (isPrimary)
-            {
-                RingingFindings.Ringing(job, edge);
-                LoopAnalyser.Measure(job);
-            }
-            isPrimary = false;
+            if (EdgeRinging.Find(edge) is { } found)
+                ringing.Add((edge, found));
         }
-        if (isPrimary)
+        RingingKind? kind = KindAnalyser.Measure(job, transitions, edges, [.. ringing.Select(r => r.Ringing)]);
+        if (kind is RingingKind.FreeRunning or RingingKind.Noise)
+            job.Sheet.Refuse("not-edge-excited", "what oscillates after the edges is not started by them", All);
+        else if (edges.Count == 0)
+            job.Sheet.Refuse("no-edge", "there is no edge that could have set anything ringing", All);
+        else if (ringing.Count == 0)
             job.Sheet.Refuse("no-ringing", string.Create(CultureInfo.InvariantCulture,
                 $"no ringing above {100 * edges.Min(EdgeRinging.Floor):0.####} % of amplitude after the edges"), All);
+        else
+            for (int i = 0; i < ringing.Count; i++)
+                Report(job, ringing[i].Edge, ringing[i].Ringing, isPrimary: i == 0);
+        if (kind is not (RingingKind.FreeRunning or RingingKind.Noise) && ringing.Count > 0)
+        {
+            RingingFindings.Ringing(job, ringing[0].Edge);
+            LoopAnalyser.Measure(job);
+        }
     }
 
     private static void Report(WaveformJob job, MeasuredEdge edge, EdgeRinging ringing, bool isPrimary)

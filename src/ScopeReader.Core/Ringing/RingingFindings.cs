@@ -19,8 +19,6 @@ internal static class RingingFindings
         string direction = edge.Edge.IsRising ? "rising" : "falling", place = edge.Edge.Edges > 1 ? $"each {direction} edge" : $"the {direction} edge";
         string text = string.Create(CultureInfo.InvariantCulture,
             $"it rings at {Engineering.Format(frequency, job.Waveform.Axis.FrequencyUnit, 3)} after {place}: {amplitude:0.##} % of amplitude at the edge, down to 1/e in {cycles:0.0#} cycles.");
-        if (edge.Edge.Edges > 1)
-            text += " It starts anew with the edges and dies away between them.";
         sheet.Add(new Finding("ringing", $"{text} {Lead(job, frequency)} {Next}"));
     }
 

@@ -16,9 +16,9 @@ public static class ComparisonJson
     public static string Document(string program, IReadOnlyList<MeasuredFile> files, Comparison? comparison) => JsonSerializer.Serialize(
         new ComparisonDocument("scopereader-comparison", 1, program, comparison?.Reference.Name, [.. files.Select(f => MeasurementJson.Capture(f, explain: false))],
             [.. (comparison?.Differences ?? []).Select(Difference)],
-            [.. (comparison?.Findings ?? []).Select(f => new FindingObject(f.Code, f.Value, f.Text))],
+            [.. (comparison?.Findings ?? []).Select(f => new FindingObject(f.Code, f.Value, f.Text, f.Level, f.Locked))],
             [.. (comparison?.Readings ?? []).Select(r => MeasurementJson.Reading(r, explain: true))],
-            [.. (comparison?.NotMeasured ?? []).Select(n => new NotMeasuredObject(n.Quantity.Id, n.Code, n.Reason))]), Context.ComparisonDocument);
+            [.. (comparison?.NotMeasured ?? []).Select(n => new NotMeasuredObject(n.Quantity.Id, n.Code, n.Reason, null, null))]), Context.ComparisonDocument);
 
     private static DifferenceObject Difference(Difference d) => new(d.Quantity.Id, d.Unit, d.File, d.Channel, d.Reference, d.Value, d.Change,
         double.IsFinite(d.Budget.ExpandedUncertainty) ? d.Budget.ExpandedUncertainty : null, d.IsSignificant, d.Ratio, d.ReferenceCount, d.Count, d.Budget.Missing);

@@ -25,7 +25,9 @@ internal sealed record NotMeasuredObject(string Quantity, string Code, string Re
     [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtMost = null,
     [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] double? AtLeast = null);
 
-internal sealed record FindingObject(string Code, string? Value, string Text);
+internal sealed record FindingObject(string Code, string? Value, string Text,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] string? Level = null,
+    [property: JsonIgnore(Condition = JsonIgnoreCondition.WhenWritingNull)] bool? Locked = null);
 
 internal sealed record VerdictObject(string Quantity, double? Low, double? High, string Unit, double? Value, double? ExpandedUncertainty, string Rule,
     double Guard, double? Probability, string Outcome, string Reason,

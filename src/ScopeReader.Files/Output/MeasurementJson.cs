@@ -56,7 +56,7 @@ public sealed class MeasurementJson(string program, bool explain)
         return new ChannelObject(channel.Name, OutputWords.Kind(channel), channel.Unit, channel.Segment, channel.Count, interval, start,
             [.. measured.Readings.Select(r => Reading(r, explain))],
             [.. measured.NotMeasured.Select(n => new NotMeasuredObject(n.Quantity.Id, n.Code, n.Reason, Finite(n.AtMost), Finite(n.AtLeast)))],
-            [.. measured.Findings.Select(f => new FindingObject(f.Code, f.Value, f.Text))],
+            [.. measured.Findings.Select(f => new FindingObject(f.Code, f.Value, f.Text, f.Level, f.Locked))],
             [.. measured.Verdicts.Select(Verdict)]);
     }
 

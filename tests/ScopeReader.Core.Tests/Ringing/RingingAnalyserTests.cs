@@ -87,9 +87,10 @@ public class RingingAnalyserTests
     {
         var sheet = new ReadingSheet();
         var waveform = new Waveform("made", "V", TimeAxis.PerSample, [0, 0, 0]);
-        RingingAnalyser.Measure(new WaveformJob(waveform, Plan.Empty, new ChainErrors(Plan.Empty, waveform.Axis), sheet, default), []);
-        Assert.Equal(8, sheet.NotMeasured.Count);
-        Assert.All(sheet.NotMeasured, n => Assert.Equal("there is no edge that could have set anything ringing", n.Reason));
+        RingingAnalyser.Measure(new WaveformJob(waveform, Plan.Empty, new ChainErrors(Plan.Empty, waveform.Axis), sheet, default), [], []);
+        NotMeasured[] ringing = [.. sheet.NotMeasured.Where(n => n.Code == "no-edge")];
+        Assert.Equal(8, ringing.Length);
+        Assert.All(ringing, n => Assert.Equal("there is no edge that could have set anything ringing", n.Reason));
     }
 
     private static double Ringing(double t)
@@ -103,7 +104,7 @@ public class RingingAnalyserTests
     {
         Waveform waveform = Steps.Record(step, 0.25e-9, 100e-9, 800e-9);
         (ReadingSheet sheet, IReadOnlyList<MeasuredEdge> edges) = Steps.Measure(waveform, plan: plan);
-        RingingAnalyser.Measure(new WaveformJob(waveform, plan, new ChainErrors(plan, waveform.Axis), sheet, default), edges);
+        RingingAnalyser.Measure(new WaveformJob(waveform, plan, new ChainErrors(plan, waveform.Axis), sheet, default), edges, []);
         return sheet;
     }
 
