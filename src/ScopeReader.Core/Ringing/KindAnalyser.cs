@@ -40,15 +40,15 @@ internal static class KindAnalyser
     }
 
     private static double Duration(IReadOnlyList<MeasuredEdge> edges, bool rising) =>
-        (edges.FirstOrDefault(e => e.Edge.IsRising == rising) ?? edges.FirstOrDefault())?.Duration ?? 2;
+        edges.OrderByDescending(e => e.Edge.IsRising == rising).FirstOrDefault()?.Duration ?? 2;
 
     private static void Report(WaveformJob job, FoundTone tone)
     {
         double perSample = 1 / (job.Waveform.Interval * job.Chain.TimeFactor), hertz = tone.Frequency * perSample;
         string note = tone.Level == "both" ? "on both levels" : $"on the {tone.Level} level only";
-        job.Sheet.Add(new Reading(Quantities.OscillationFrequency, hertz, job.Waveform.Axis.FrequencyUnit,
-            job.Chain.ForTime(hertz, EdgeTimes.Present(BudgetTerm.Normal("noise", tone.FrequencyUncertainty, perSample))), "level-windows") { Note = note });
-        job.Sheet.Add(new Reading(Quantities.OscillationLevel, tone.Rms, job.Waveform.Unit,
-            job.Chain.ForLevelDifference(tone.Rms, EdgeTimes.Present(BudgetTerm.Normal("noise", tone.RmsUncertainty))), "level-windows") { Note = note });
+        Budget ofFrequency = job.Chain.ForTime(hertz, EdgeTimes.Present(BudgetTerm.Normal("noise", tone.FrequencyUncertainty, perSample)));
+        Budget ofLevel = job.Chain.ForLevelDifference(tone.Rms, EdgeTimes.Present(BudgetTerm.Normal("noise", tone.RmsUncertainty)));
+        job.Sheet.Add(new Reading(Quantities.OscillationFrequency, hertz, job.Waveform.Axis.FrequencyUnit, ofFrequency, "level-windows") { Note = note });
+        job.Sheet.Add(new Reading(Quantities.OscillationLevel, tone.Rms, job.Waveform.Unit, ofLevel, "level-windows") { Note = note });
     }
 }
