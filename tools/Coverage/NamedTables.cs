@@ -11,6 +11,8 @@ internal static class NamedTables
 {
     public static IReadOnlyList<NamedTable> All { get; } =
     [
+        new("ringing-bound", "fits of damped sinusoids over the Cramer-Rao bound", RingingBoundTable.Write),
+        new("equivalent-time", "edges near one sample interval", EquivalentTimeTable.Write),
         new("kinds", "what made oscillations are called: the confusion matrix", KindTable.Write),
         new("dbc", "harmonics, distortion, noise and spurs of made sources", DbcTable.Write),
         new("trace", "spectrum traces: levels, powers, noise density, occupied bandwidth", TraceTable.Write),

@@ -33,6 +33,15 @@ public static class ChainBandwidth
         return Combine(chain.InputBandwidth is { } input ? k / input : 0, chain.ProbeBandwidth is { } probe ? k / probe : 0);
     }
 
+    /// <summary>What is left of a measured duration without the chain's: the root of the difference of squares.</summary>
+    /// <param name="measured">Measured duration, at least <paramref name="chain"/>.</param>
+    /// <param name="chain">The chain's own.</param>
+    public static double Corrected(double measured, double chain)
+    {
+        ArgumentOutOfRangeException.ThrowIfLessThan(measured, chain);
+        return Math.Sqrt((measured - chain) * (measured + chain));
+    }
+
     /// <summary>Duration of two Gaussian stages in a row: the root of the sum of squares.</summary>
     public static double Combine(double first, double second) => double.Hypot(first, second);
 }

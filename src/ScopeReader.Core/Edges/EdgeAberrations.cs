@@ -12,7 +12,7 @@ namespace ScopeReader.Edges;
 /// </remarks>
 internal static class EdgeAberrations
 {
-    private const double ResolvedOverFloor = 2;
+    private const double ResolvedOverFloor = 2, LiftedByNoise = 3;
 
     /// <summary>Writes the readings, or why there are none, down.</summary>
     /// <param name="job">The job.</param>
@@ -73,8 +73,11 @@ internal static class EdgeAberrations
             job.Sheet.RefuseBelow("not-resolved", $"no excursion above {Engineering.Given(least, "%", 2)} of amplitude, the least that this capture can show", least, quantity);
             return;
         }
+        // What noise lifts over the threshold reads high: near it the true value may lie as far below as noise lifts.
+        double lifted = Math.Max(0, ResolvedOverFloor * floor + LiftedByNoise * double.Hypot(100 * double.Hypot(extremum.Noise, extremum.Rounding), byStates) - percent);
         BudgetTerm[] terms =
         [
+            BudgetTerm.Rectangular("selection", lifted),
             BudgetTerm.Normal("noise", 100 * extremum.Noise),
             BudgetTerm.Normal("quantisation", 100 * extremum.Rounding),
             BudgetTerm.Normal(edge.Edge.IsRising ? "high-level" : "low-level", 100 * edge.AfterUncertainty, extremum.Value),

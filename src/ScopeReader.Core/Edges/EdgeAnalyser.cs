@@ -9,11 +9,8 @@ namespace ScopeReader.Edges;
 /// <remarks>Everything is read off the averaged edge of one polarity; see <see cref="AveragedEdge"/> and the readers' own remarks.</remarks>
 public static class EdgeAnalyser
 {
-    // Faster edges leave one sample on their slope in most of their passages: a Gaussian edge of 1.5 samples then reads 3 % short.
-    private const double FewestSamples = 1.8;
-
-    private static readonly Quantity[] Rising = [Quantities.RiseTime, Quantities.RiseSlew, Quantities.RiseOvershoot, Quantities.RiseUndershoot, Quantities.RisePreshoot, Quantities.RiseSettling];
-    private static readonly Quantity[] Falling = [Quantities.FallTime, Quantities.FallSlew, Quantities.FallOvershoot, Quantities.FallUndershoot, Quantities.FallPreshoot, Quantities.FallSettling];
+    private static readonly Quantity[] Rising = [Quantities.RiseTime, Quantities.RiseTimeCorrected, Quantities.RiseSlew, Quantities.RiseOvershoot, Quantities.RiseUndershoot, Quantities.RisePreshoot, Quantities.RiseSettling];
+    private static readonly Quantity[] Falling = [Quantities.FallTime, Quantities.FallTimeCorrected, Quantities.FallSlew, Quantities.FallOvershoot, Quantities.FallUndershoot, Quantities.FallPreshoot, Quantities.FallSettling];
 
     /// <summary>Measures the edges of both polarities.</summary>
     /// <param name="job">The job.</param>
@@ -31,18 +28,35 @@ public static class EdgeAnalyser
             job.Sheet.Refuse("not-two-state", "the wave does not rest at two levels, so it has no edges", [.. Rising, .. Falling]);
             return [];
         }
-        double? rise = CrudeDuration.Of(job.Waveform.Samples, levels, transitions, rising: true);
-        double? fall = CrudeDuration.Of(job.Waveform.Samples, levels, transitions, rising: false);
+        EdgeFindings.Runts(job, Runt.Find(job.Waveform.Samples, levels.Low, levels.High, levels.Noise, transitions));
+        double? rise = Crude(job, levels, transitions, rising: true), fall = Crude(job, levels, transitions, rising: false);
         MeasuredEdge? rising = Resolve(job, levels, codeStep, transitions, grid, true, rise, fall ?? rise ?? 0);
         MeasuredEdge? falling = Resolve(job, levels, codeStep, transitions, grid, false, fall, rise ?? fall ?? 0);
 
         double? riseSettling = rising is null ? null : EdgeSettling.Read(job, rising, Note(rising));
         double? fallSettling = falling is null ? null : EdgeSettling.Read(job, falling, Note(falling));
+        Statistics(job, levels, transitions, rising);
+        Statistics(job, levels, transitions, falling);
         if (rising is not null)
             EdgeAberrations.Read(job, rising, HasSettled(job, transitions, rising, fallSettling), Note(rising));
         if (falling is not null)
             EdgeAberrations.Read(job, falling, HasSettled(job, transitions, falling, riseSettling), Note(falling));
-        return [.. new[] { rising, falling }.OfType<MeasuredEdge>()];
+        MeasuredEdge[] edges = [.. new[] { rising, falling }.OfType<MeasuredEdge>()];
+        // After the overshoot, which decides whether the chain may be taken out.
+        foreach (MeasuredEdge edge in edges)
+            ChainCorrection.Read(job, edge);
+        return edges;
+    }
+
+    // The scale that cells and windows are set by; never so small that there would be no cell.
+    private static double? Crude(WaveformJob job, StateLevels levels, IReadOnlyList<Transition> transitions, bool rising) =>
+        SingleEdge.Median(job.Waveform.Samples, [.. transitions.Where(t => t.IsRising == rising)], levels.Low, levels.High) is { } duration ? Math.Max(0.05, duration) : null;
+
+    private static void Statistics(WaveformJob job, StateLevels levels, IReadOnlyList<Transition> transitions, MeasuredEdge? edge)
+    {
+        if (edge is { IsResolved: true })
+            EdgeStatistics.Of(job.Waveform.Samples, transitions.Where(t => t.IsRising == edge.Edge.IsRising),
+                levels.At(job.Plan.Levels.ReferenceLowPercent / 100), levels.At(job.Plan.Levels.ReferenceHighPercent / 100))?.Report(job, edge);
     }
 
     private static MeasuredEdge? Resolve(WaveformJob job, StateLevels levels, double codeStep, IReadOnlyList<Transition> transitions, PeriodGrid? grid,
@@ -67,17 +81,16 @@ public static class EdgeAnalyser
                 break;
             duration = edge.Duration;
         }
-        if (edge is { IsResolved: true } && edge.Duration < FewestSamples)
-        {
-            problem = new EdgeProblem("too-few-samples", $"the edge takes fewer than two sample intervals, at most {Describe(job, 2)}: its course shows in no sample; sample faster");
-            edge = null;
-        }
+        if (edge is { IsResolved: true } && EquivalentTime.Problem(job, edge.Duration, grid, transitions.Count) is { } tooFast)
+            (problem, edge) = (tooFast, null);
         if (problem is not null)
-            job.Sheet.Refuse(problem.Code, problem.Reason, edge is null ? all : all[..2]);
+            job.Sheet.Refuse(problem.Code, problem.Reason, edge is null ? all : all[..3]);
         if (edge is null)
             return null;
         EdgeTimes.Read(job, edge, levels.Amplitude, string.Create(CultureInfo.InvariantCulture,
             $"{job.Plan.Levels.ReferenceLowPercent:0.##} to {job.Plan.Levels.ReferenceHighPercent:0.##} %, {Note(edge)}"));
+        if (edge.IsResolved)
+            EquivalentTime.Tell(job, edge);
         EdgeFindings.Chain(job, edge);
         EdgeFindings.Shape(job, edge);
         return edge;

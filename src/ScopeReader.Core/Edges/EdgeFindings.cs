@@ -32,6 +32,19 @@ internal static class EdgeFindings
             edge.Edge.IsRising ? "rise" : "fall"));
     }
 
+    /// <summary>Names pulses that turn back before they reach the other state.</summary>
+    public static void Runts(WaveformJob job, IReadOnlyList<Runt> runts)
+    {
+        if (runts.Count == 0)
+            return;
+        Runt first = runts[0];
+        double time = job.Waveform.Axis.Start + first.Index * job.Waveform.Interval;
+        string place = string.Create(CultureInfo.InvariantCulture,
+            $"{Engineering.Format(time, job.Waveform.Axis.TimeUnit, 4)}, where the wave leaves the {(first.FromHigh ? "high" : "low")} state and turns back after {100 * first.Reach:0} % of amplitude");
+        job.Sheet.Add(new Finding("runts", (runts.Count == 1 ? $"a runt at {place}. " : string.Create(CultureInfo.InvariantCulture, $"{runts.Count} runts, the first at {place}. "))
+            + "It counts as no edge. Look for two drivers at once, a pulse too short for its load, or a reflection.", string.Create(CultureInfo.InvariantCulture, $"{runts.Count}")));
+    }
+
     /// <summary>Says that the edge's course is not simple.</summary>
     public static void Shape(WaveformJob job, MeasuredEdge edge)
     {

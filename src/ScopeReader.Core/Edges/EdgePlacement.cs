@@ -18,6 +18,9 @@ internal readonly record struct EdgePlacement(double? Origin, double Period, dou
         double? origin = rising ? grid?.RisingOrigin : grid?.FallingOrigin;
         if (grid is null || origin is null || edges < 3)
             return new EdgePlacement(null, 0, 1, edges > 1 ? own : 0);
+        // The straight line between two samples of so short an edge says nothing of jitter.
+        if (EquivalentTime.IsNeeded(duration))
+            return new EdgePlacement(origin, grid.Period, 0, 0);
 
         double spread = 0;
         foreach (Transition t in transitions)

@@ -85,7 +85,7 @@ public sealed record CrossingFrequency
         ArgumentNullException.ThrowIfNull(shape);
         if (transitions.Count < 3)
             return null;
-        double duration = ScopeReader.Edges.EdgeDuration.Rough(samples, transitions, low, high);
+        double duration = ScopeReader.Edges.SingleEdge.Median(samples, transitions, low, high) ?? 0;
         double halfWindow = shape.Kind == WaveKind.Sinusoidal ? SineWindow * RoughPeriod(transitions) : EdgeWindow * duration;
         EdgeInstants instants = EdgeInstants.Read(samples, transitions, (low + high) / 2, halfWindow);
         if (EdgeRegression.Fit(instants.Rising, instants.Falling) is not { } fit || fit.Spread > LargestSpread * fit.Period || fit.Outliers > transitions.Count / 5)
@@ -93,7 +93,7 @@ public sealed record CrossingFrequency
 
         double slope = 0.8 * (high - low) / Math.Max(duration, 0.8);
         double expected = instants.NoiseFactor * Math.Sqrt(noise * noise + shape.Step * shape.Step / 12) / slope;
-        double bound = EdgeInterpolation.LargestError(duration > Resolved ? duration : 0);
+        double bound = duration > Resolved ? ScopeReader.Edges.InterpolationError.LinearAtMiddle(duration) : 0.5;
         // The states' noise hides the steps of the converter from 0.3 step on.
         if (noise < 0.3 * shape.Step)
             bound = Math.Min(0.5, bound + shape.Step / 2 / slope);

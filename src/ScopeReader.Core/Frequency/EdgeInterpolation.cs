@@ -1,24 +1,12 @@
 namespace ScopeReader.Frequency;
 
-/// <summary>How far off a crossing is that was read off a straight line between samples, and what that does to a period.</summary>
+/// <summary>What the error of crossings read off straight lines between samples does to a period; see <see cref="ScopeReader.Edges.InterpolationError"/>.</summary>
 public static class EdgeInterpolation
 {
     /// <summary>Fewer wraps of the crossings through the sample interval than this do not average the error.</summary>
     public const double FewestWraps = 5;
 
     private const int HighestHarmonic = 4;
-
-    /// <summary>Largest error of the line between two samples on a Gaussian edge, samples.</summary>
-    /// <param name="duration">10 to 90 % duration of the edge, samples.</param>
-    /// <remarks>
-    /// min(0.5, 0.1052/(d² + 0.17)): the cubic term of the edge for large d, fitted to the exact errors 0.0899 (d = 1), 0.0255
-    /// (2), 0.01156 (3), 0.00654 (4) and 0.00164 (8), within 1.5 %; shorter edges it overstates (0.25 for 0.212 at 0.5).
-    /// </remarks>
-    public static double LargestError(double duration)
-    {
-        ArgumentOutOfRangeException.ThrowIfNegative(duration);
-        return Math.Min(0.5, 0.1052 / (duration * duration + 0.17));
-    }
 
     /// <summary>Largest error of a band-limited fit on a Gaussian edge, samples: what the edge holds beyond half the sample rate is folded.</summary>
     /// <param name="duration">10 to 90 % duration of the edge, samples.</param>

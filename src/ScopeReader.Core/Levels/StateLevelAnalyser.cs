@@ -67,7 +67,7 @@ public static class StateLevelAnalyser
     private static (StateEstimate Low, StateEstimate High) Estimate(ReadOnlySpan<double> samples, WaveShape shape)
     {
         IReadOnlyList<Transition> transitions = Transitions.Find(samples, shape.Lower, shape.Upper, shape.Noise);
-        double duration = EdgeDuration.Rough(samples, transitions, shape.Lower, shape.Upper);
+        double duration = SingleEdge.Median(samples, transitions, shape.Lower, shape.Upper) ?? 0;
         IReadOnlyList<Plateau> plateaus = Plateaus.Find(samples.Length, transitions, duration);
         return (Side(samples, shape, plateaus, isHigh: false), Side(samples, shape, plateaus, isHigh: true));
     }

@@ -69,6 +69,12 @@ public static class Quantities
     /// <summary>Fall time.</summary>
     public static Quantity FallTime { get; } = new("fall-time", "s", "transition duration of falling edges between the reference levels, as seen through the chain", Ieee181, Waveform);
 
+    /// <summary>Rise time without the chain's.</summary>
+    public static Quantity RiseTimeCorrected { get; } = new("rise-time-corrected", "s", "rise time with the duration of the chain's stated response taken out, as a difference of squares", "Elmore 1948", Waveform);
+
+    /// <summary>Fall time without the chain's.</summary>
+    public static Quantity FallTimeCorrected { get; } = new("fall-time-corrected", "s", "fall time with the duration of the chain's stated response taken out, as a difference of squares", "Elmore 1948", Waveform);
+
     /// <summary>Slew rate of rising edges.</summary>
     public static Quantity RiseSlew { get; } = new("rise-slew", "V/s", "level change between the reference levels over the rise time", Common, Waveform);
 
@@ -203,7 +209,7 @@ public static class Quantities
     [
         Frequency, FrequencyError, Period, PeriodJitter, CycleToCycleJitter, TimeIntervalError, FrequencyDrift, AllanDeviation, DutyFactor,
         HighLevel, LowLevel, Amplitude, PeakToPeak, Mean, Rms,
-        RiseTime, FallTime, RiseSlew, FallSlew, RiseOvershoot, FallOvershoot, RiseUndershoot, FallUndershoot,
+        RiseTime, FallTime, RiseTimeCorrected, FallTimeCorrected, RiseSlew, FallSlew, RiseOvershoot, FallOvershoot, RiseUndershoot, FallUndershoot,
         RisePreshoot, FallPreshoot, RiseSettling, FallSettling, HighWidth, LowWidth,
         RingingFrequency, RingingDampingRatio, RingingQ, RingingDecayTime, RingingAmplitude, RingingInductance, RingingCapacitance, DampingResistance,
         OscillationFrequency, OscillationLevel,

@@ -36,9 +36,10 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
             // What a fit from a later start does not find again was the end of the edge, not ringing.
             if (Refined(edge, fit.Curve, later, end) is not { } check)
                 return null;
-            double f = Shift(fit, check, start, later, Of.Frequency), a = Shift(fit, check, start, later, Of.Decay), r = Shift(fit, check, start, later, Of.Amplitude);
+            var (all, again) = WithMore(edge, fit, check, start, later, end);
+            double f = Shift(all, again, start, later, Of.Frequency), a = Shift(all, again, start, later, Of.Decay), r = Shift(all, again, start, later, Of.Amplitude);
             if ((f == 0 && a == 0 && r == 0) || move == 3)
-                return new EdgeRinging(fit, start, f, a, r, Follow(edge, fit, start));
+                return new EdgeRinging(all, start, f, a, r, Follow(edge, all, start));
             (found, start) = (check, later);
         }
     }
@@ -60,9 +61,11 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
     }
 
     /// <summary>Value and standard uncertainty of a quantity.</summary>
-    public (double Value, double Uncertainty) Read(Of quantity)
+    /// <param name="quantity">Which.</param>
+    /// <param name="mode">Of which of the fit's modes; 0 for the largest.</param>
+    public (double Value, double Uncertainty) Read(Of quantity, int mode = 0)
     {
-        var (value, uncertainty) = Read(Fit, Start, quantity);
+        var (value, uncertainty) = Read(Fit, Start, quantity, mode);
         return (value, uncertainty * Math.Sqrt(Fit.ReducedChiSquare) * Correlation);
     }
 
@@ -81,9 +84,9 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
     // A fit counts its time from the first point in its window.
     private static double FirstTime(MeasuredEdge edge, double from) => edge.Edge.Times[Math.Min(edge.Edge.IndexAt(from), edge.Edge.Times.Length - 1)];
 
-    private static (double Value, double Uncertainty) Read(DampedSinusoidFit fit, double start, Of quantity)
+    private static (double Value, double Uncertainty) Read(DampedSinusoidFit fit, double start, Of quantity, int mode = 0)
     {
-        DampedSinusoid c = fit.Curve;
+        DampedSinusoid c = fit.Modes[mode];
         Span<double> gradient = stackalloc double[DampedSinusoid.Unknowns];
         double value;
         switch (quantity)
@@ -105,7 +108,22 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
                 (gradient[1], gradient[2], gradient[3]) = (start * value, c.Cosine / c.Amplitude * back, c.Sine / c.Amplitude * back);
                 break;
         }
-        return (value, fit.Uncertainty(gradient));
+        return (value, fit.Uncertainty(gradient, mode));
+    }
+
+    // Six time constants hold all but 0.25 % of it; three cycles and two transitions fix the level that it dies away to.
+    private static RingingWindow Window(MeasuredEdge edge, DampedSinusoid curve, double start, double end)
+    {
+        double length = Math.Max(Math.Max(6 / curve.Decay, 3 / curve.Frequency), 2 * edge.Duration);
+        return RingingWindow.Of(edge.Edge, start, Math.Min(end, start + length), MostPoints);
+    }
+
+    // With what else rings beside it, and the same from the later start.
+    private static (DampedSinusoidFit All, DampedSinusoidFit Again) WithMore(MeasuredEdge edge, DampedSinusoidFit fit, DampedSinusoidFit check, double start, double later, double end)
+    {
+        RingingWindow window = Window(edge, fit.Curve, start, end), after = Window(edge, fit.Curve, later, end);
+        DampedSinusoidFit all = RingingModes.Extended(window, fit, after);
+        return all.Modes.Count > 1 && RingingModes.Again(after, all) is { } again ? (all, again) : (fit, check);
     }
 
     // The best of several windows, each twice to four times as long as the one before: the ringing may die at once or last.
@@ -116,13 +134,8 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
         {
             bool isWhole = length >= end - start;
             var window = RingingWindow.Of(edge.Edge, start, isWhole ? end : start + length, 512);
-            if (RingingStart.Frequency(window) is { } frequency)
-            {
-                double flat = window.WithoutRinging().ChiSquare, span = window.Times[^1] - window.Times[0];
-                foreach (double decay in (ReadOnlySpan<double>)[2 / span, frequency, 8 / span])
-                    if (window.Fit(frequency, decay) is { } fit && flat - fit.ChiSquare > best.Gain)
-                        best = (fit, flat - fit.ChiSquare);
-            }
+            if (RingingSearch.One(window) is { } fit && window.WithoutRinging().ChiSquare - fit.ChiSquare is var gain && gain > best.Gain)
+                best = (fit, gain);
             if (isWhole)
                 return best.Fit;
         }
@@ -133,9 +146,7 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
     {
         if (!(curve.Decay > 0))
             curve = curve with { Decay = 1 / (end - start) };
-        // Six time constants hold all but 0.25 % of it; three cycles and two transitions fix the level that it dies away to.
-        double length = Math.Max(Math.Max(6 / curve.Decay, 3 / curve.Frequency), 2 * edge.Duration);
-        var window = RingingWindow.Of(edge.Edge, start, Math.Min(end, start + length), MostPoints);
+        RingingWindow window = Window(edge, curve, start, end);
         if (window.Times.Length < 3 * DampedSinusoid.Unknowns || window.Fit(curve.Frequency, curve.Decay) is not { } fit)
             return null;
         var (chiSquare, unknowns) = window.WithoutRinging();
@@ -165,7 +176,7 @@ internal sealed record EdgeRinging(DampedSinusoidFit Fit, double Start, double F
         double sum = 0, product = 0, before = 0;
         for (int i = 0; i < n; i++)
         {
-            double r = (window.Values[i] - fit.Curve.At(window.Times[i] - window.Times[0])) / Math.Sqrt(window.Variances[i]);
+            double r = (window.Values[i] - fit.At(window.Times[i] - window.Times[0])) / Math.Sqrt(window.Variances[i]);
             sum += r * r;
             product += r * before;
             before = r;

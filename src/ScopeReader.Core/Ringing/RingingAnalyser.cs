@@ -74,6 +74,24 @@ public static class RingingAnalyser
                 BudgetTerm.Normal("50 % instant", edge.Middle.Noise, 100 * amplitude * decay)),
         ]));
 
+        for (int mode = 1; mode < ringing.Fit.Modes.Count; mode++)
+            Beside(mode);
+
+        // What rings beside the largest: for comparison, so that no limit judges it.
+        void Beside(int mode)
+        {
+            string method = string.Create(CultureInfo.InvariantCulture, $"{(edge.Edge.IsRising ? "rising" : "falling")}-edge-fit-mode-{mode + 1}");
+            var (f, u) = ringing.Read(EdgeRinging.Of.Frequency, mode);
+            Note(Quantities.RingingFrequency, f / toTime, job.Waveform.Axis.FrequencyUnit, job.Chain.ForTime(f / toTime, Own(u, 0, 1 / toTime)));
+            var (z, uOfRatio) = ringing.Read(EdgeRinging.Of.DampingRatio, mode);
+            Note(Quantities.RingingDampingRatio, z, "1", new Budget(Own(uOfRatio, 0, 1)));
+            var (r, uOfAmplitude) = ringing.Read(EdgeRinging.Of.Amplitude, mode);
+            Note(Quantities.RingingAmplitude, 100 * r, "%", new Budget(Own(uOfAmplitude, 0, 100)));
+
+            void Note(Quantity quantity, double value, string unit, Budget budget) =>
+                job.Sheet.Add(new Reading(quantity, value, unit, budget, method) { IsPrimary = false, Count = edge.Edge.Edges, Note = "rings beside the largest" });
+        }
+
         IEnumerable<BudgetTerm> Own(double u, double shift, double sensitivity) => EdgeTimes.Present(
             BudgetTerm.Normal("fit", u, sensitivity, ringing.Fit.DegreesOfFreedom),
             BudgetTerm.Rectangular("start", shift, sensitivity));

@@ -7,7 +7,10 @@ internal sealed class RingingWindow
 {
     private readonly double[] _times, _values, _variances;
 
-    private RingingWindow(double[] times, double[] values, double[] variances) => (_times, _values, _variances) = (times, values, variances);
+    /// <param name="times">Shape [points], rising.</param>
+    /// <param name="values">Shape [points].</param>
+    /// <param name="variances">Shape [points], above 0.</param>
+    public RingingWindow(double[] times, double[] values, double[] variances) => (_times, _values, _variances) = (times, values, variances);
 
     /// <summary>Shape [points]: samples from the 50 % instant.</summary>
     public ReadOnlySpan<double> Times => _times;
@@ -45,6 +48,40 @@ internal sealed class RingingWindow
 
     /// <summary>Fits a damped sinusoid from a start.</summary>
     public DampedSinusoidFit? Fit(double frequency, double decay) => DampedSinusoidFit.From(_times, _values, _variances, frequency, decay);
+
+    /// <summary>Fits several damped sinusoids from their starts.</summary>
+    public DampedSinusoidFit? Fit(ReadOnlySpan<(double Frequency, double Decay)> starts) => DampedSinusoidFit.From(_times, _values, _variances, starts);
+
+    /// <summary>The same points with a fit taken off.</summary>
+    public RingingWindow Less(DampedSinusoidFit fit)
+    {
+        double[] rest = new double[_values.Length];
+        for (int i = 0; i < rest.Length; i++)
+            rest[i] = _values[i] - fit.At(_times[i] - _times[0]);
+        return new RingingWindow(_times, rest, _variances);
+    }
+
+    /// <summary>Means over so many stretches of equal length, or as many as there are points; none where a stretch holds no point.</summary>
+    public double[] Evenly(int most)
+    {
+        int n = Math.Min(most, _times.Length);
+        double[] means = new double[n], weights = new double[n];
+        double span = _times[^1] - _times[0], stretch = span / Math.Max(1, n - 1);
+        for (int i = 0; i < _times.Length; i++)
+        {
+            // Points at even distances lie in the middles of their stretches.
+            int k = Math.Min(n - 1, (int)((_times[i] - _times[0]) / stretch + 0.5));
+            means[k] += _values[i] / _variances[i];
+            weights[k] += 1 / _variances[i];
+        }
+        for (int k = 0; k < n; k++)
+        {
+            if (weights[k] == 0)
+                return [];
+            means[k] /= weights[k];
+        }
+        return means;
+    }
 
     /// <summary>Smallest sum of squared residuals, each over its variance, of what does not ring: a level with a slope, or an exponential.</summary>
     /// <returns>The sum and the number of unknowns.</returns>
