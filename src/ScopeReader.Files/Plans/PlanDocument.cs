@@ -14,11 +14,14 @@ internal sealed class PlanDocument
 
     private readonly List<PlanSection> _sections = [];
 
-    private PlanDocument(string text, string file) => (Text, File) = (text, file);
+    private PlanDocument(string text, string file, DocumentSyntax syntax) => (Text, File, Syntax) = (text, file, syntax);
 
     public string Text { get; }
 
     public string File { get; }
+
+    /// <summary>The text's own tree, for what changes it in place.</summary>
+    public DocumentSyntax Syntax { get; }
 
     /// <summary>The tables in the file's order; the keys above the first table come first.</summary>
     public IReadOnlyList<PlanSection> Sections => _sections;
@@ -32,7 +35,7 @@ internal sealed class PlanDocument
             DiagnosticMessage first = syntax.Diagnostics.Where(d => d.Kind == DiagnosticMessageKind.Error).MinBy(d => d.Span.Start.Offset)!;
             throw new PlanException(file, first.Span.Start.Line + 1, $"not readable as TOML: {Decapitalised(first.Message)}");
         }
-        var document = new PlanDocument(text, file);
+        var document = new PlanDocument(text, file, syntax);
         var top = new PlanSection(Top, IsList: false, Line: 1);
         document._sections.Add(top);
         foreach (KeyValueSyntax pair in syntax.KeyValues)

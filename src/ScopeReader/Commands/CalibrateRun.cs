@@ -25,7 +25,9 @@ internal sealed record CalibrateRun(Surroundings Surroundings, Plan Plan, string
         // A plan that cannot be written into is found before anything is measured.
         string? text = Into is null ? null : ReadPlan(Into);
         Plan indicating = Plan with { Limits = [], Chain = TimebaseCalibration.Uncorrected(Plan.Chain) };
-        MeasuredFile measured = CaptureMeasurer.Measure(file, indicating, Channel, cancellation);
+        using ProgressLine progress = Surroundings.Progress(cancellation);
+        MeasuredFile measured = CaptureMeasurer.Measure(file, indicating, Channel, progress, cancellation);
+        progress.Hide();
         if (measured.Measurement is not { } measurement)
             return Failed(measured.Error!);
         ChannelMeasurement[] with = [.. measurement.Channels.Where(c => Frequency(c) is not null)];
