@@ -31,10 +31,11 @@ internal static class Prospect
             BudgetTerm stays = Longer(reading, LongestRecord).MaxBy(t => t.Contribution)!;
             if (!stays.OfChain)
                 return $"within the guard band, and {stays.Name} does not fall with a longer record: {Against(stays.Name)}";
-            // With the other terms as they are, how good would the chain have to be?
-            double share = Bisect(s => Decides([.. Longer(reading, LongestRecord).Where(t => !t.OfChain), .. chain.Select(t => t.Times(s))]), 0, 1);
+            // With the other terms as they are, how good would the chain have to be? A calibration's error is normal.
+            double standard = Math.Sqrt(chain.Sum(t => t.Contribution * t.Contribution));
+            double share = Bisect(s => Decides([.. Longer(reading, LongestRecord).Where(t => !t.OfChain), BudgetTerm.Normal(stays.Name, s * standard)]), 0, 1);
             return share > 0
-                ? $"within the guard band, and {stays.Name} alone is too uncertain: no longer record will decide it; {Reference(reading, chain, share)} would"
+                ? $"within the guard band, and {stays.Name} alone is too uncertain: no longer record will decide it; {Reference(reading, chain, share * standard)} would"
                 : $"so near the bound that no reference and no record will decide it: judge it by the simple rule, or move the bound";
         }
         double longer = 1 / Bisect(s => Decides(Longer(reading, 1 / s)), 1 / LongestRecord, 1);
@@ -78,9 +79,8 @@ internal static class Prospect
         return low;
     }
 
-    private static string Reference(Reading reading, BudgetTerm[] chain, double share)
+    private static string Reference(Reading reading, BudgetTerm[] chain, double standard)
     {
-        double standard = Math.Sqrt(chain.Sum(t => t.Contribution * t.Contribution)) * share;
         if (!chain.All(t => t.Name.StartsWith("timebase", StringComparison.Ordinal)))
             return $"a chain calibrated to a standard uncertainty of {Engineering.Format(standard, reading.Unit, 2)}";
         double ppm = reading.Unit == "ppm" ? standard : standard / Math.Abs(reading.Value) * 1e6;

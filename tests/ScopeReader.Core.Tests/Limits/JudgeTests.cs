@@ -77,11 +77,10 @@ public class JudgeTests
         new Budget([BudgetTerm.Normal("noise", 0.1), BudgetTerm.Rectangular("timebase", 25, ofChain: true)]), "crossings")
     { Count = 200 };
 
-    // Closed form: 10 ppm from the bound, and no noise left in a long record: 0.95 of a rectangle's half-width a is to be 10 ppm,
-    // and its standard uncertainty a/√3 = 10/0.95/√3 = 6.08 ppm.
+    // Closed form: 10 ppm from the bound, no noise left in a long record, and a calibration's normal error: 1.96 u is to be 10 ppm, u = 5.1 ppm.
     [Fact]
     public void A_timebase_that_is_too_loose_is_named_with_what_it_would_have_to_be() =>
-        Assert.Equal("within the guard band, and timebase alone is too uncertain: no longer record will decide it; a timebase calibrated to a standard uncertainty of 6.1 ppm (scopereader calibrate, with a reference at least as good) would",
+        Assert.Equal("within the guard band, and timebase alone is too uncertain: no longer record will decide it; a timebase calibrated to a standard uncertainty of 5.1 ppm (scopereader calibrate, with a reference at least as good) would",
             Judge.Reading(Within(50), Loose(40)).Reason);
 
     // Closed form: u = 1 ppm, 1 ppm from the bound: 1.96 u is to be 1 ppm, so u is to fall by 1.96, which takes 1.96^(2/3) = 1.57 times
