@@ -32,10 +32,10 @@ internal sealed record KindOfRinging(RingingKind Kind, FoundTone? Tone, bool? Is
         if (spans.Count < FewestEdges - 1)
             return null;
         var frequencies = new List<double>(ringing.Take(1));
-        if (ringing.Count == 0 && EarlySpectrum.Highest(samples, spans) is { } early)
+        if (ringing.Count == 0 && LevelSpectrum.Early(samples, spans) is { } early)
             frequencies.Add(early);
         // What lies within a window's width of a ringing is looked at with it.
-        if (LateSpectrum.Highest(samples, spans) is { } late && frequencies.All(f => Math.Abs(f - late) > f / 3))
+        if (LevelSpectrum.Late(samples, spans) is { } late && frequencies.All(f => Math.Abs(f - late) > f / 3))
             frequencies.Add(late);
         var bands = new List<BandJudgement>();
         foreach (double frequency in frequencies)
