@@ -48,9 +48,12 @@ internal sealed class NoiseReport(HarmonicLines lines)
         double others = harmonics + noise.Lines.Sum(l => l.Amplitude * l.Amplitude / 2), n = _levels.Count;
         // The mean square of noise scatters by σ²√(2/ν); a line of amplitude A, read together with it, by A·σ√(2/N).
         double own = noise.Variance * Math.Sqrt(2 / (noise.Whiteness * n));
-        double u = Math.Sqrt(own * own + 4 * others * noise.Variance / n);
+        double square = own * own + 4 * others * noise.Variance / n;
+        // Two lines that are some cycles a record apart are not quite orthogonal: their powers do not just add up.
+        foreach (HarmonicLevel h in lines.Harmonics.Skip(1))
+            square += Math.Pow(h.Fitted * h.Leakage, 2);
         Budget budget = _job.Chain.ForRelativeDecibels(
-            [BudgetTerm.Normal("noise", u, Decibels.PerRelativeAmplitude / 2 / rest), .. lines.Fundamental.Terms(" of fundamental"), .. lines.RollOff.Terms(2), lines.FrequencyTerm(1)]);
+            [BudgetTerm.Normal("noise", Math.Sqrt(square), Decibels.PerRelativeAmplitude / 2 / rest), .. lines.Fundamental.Terms(" of fundamental"), .. lines.RollOff.Terms(2), lines.FrequencyTerm(1)]);
         double sinad = Decibels.OfPowers(_power / rest);
         Add(Quantities.Sinad, sinad, budget, Text($"over the band to {lines.Place(0.5)}"));
         if (harmonics > MostDistorted * _power)

@@ -4,12 +4,12 @@ using static ScopeReader.Harmonics.HarmonicAnalyser;
 
 namespace ScopeReader.Harmonics;
 
-/// <summary>Writes channel power, occupied bandwidth and noise density of a trace down, or why not.</summary>
+/// <summary>Writes channel power and noise density of a trace down, or why not.</summary>
 /// <remarks>
 /// The resolution filter counts as Gaussian; four synchronously tuned poles have 0.25 dB more noise bandwidth, which bounds the
 /// error. What a trace averages decides how far its noise reads low: 2.51 dB for levels, 1.05 for voltages, nothing for power.
 /// Unless the file says, a trace whose noise scatters as a single sweep's does is not averaged, and for any other the middle of 0
-/// and 2.51 dB is taken off with half of it as bound. A peak detector's noise has no such figure and is refused.
+/// and 2.51 dB is added with half of it as bound. A peak detector's noise has no such figure and is refused.
 /// </remarks>
 internal sealed class TracePowerReport(TraceLevels levels, SpectrumTrace trace, Plan plan, ReadingSheet sheet)
 {
@@ -17,7 +17,7 @@ internal sealed class TracePowerReport(TraceLevels levels, SpectrumTrace trace, 
 
     // Unaveraged noise has 1 average by its scatter; a median of a hundred points or more stays below this.
     private const double Unaveraged = 1.6;
-    private const double MostSpacing = 1.1, OutsideShare = 0.005, NoNoise = 1e6, MostNoise = 0.2;
+    private const double NoNoise = 1e6;
     private const int FewPoles = 4;
 
     private readonly ChainErrors _chain = new(plan, null);
@@ -25,7 +25,7 @@ internal sealed class TracePowerReport(TraceLevels levels, SpectrumTrace trace, 
     public void Write(int from)
     {
         TraceNoise noise = levels.Floor(from);
-        WriteOccupied(from, noise);
+        new OccupiedBandReport(levels, trace, _chain, sheet).Write(from, noise);
         Quantity[] powers = [Quantities.ChannelPower, Quantities.NoiseDensity];
         if (trace.ResolutionBandwidth is not { } filter)
             sheet.Refuse("no-resolution-bandwidth", "the file states no resolution bandwidth, and a power needs the filter's noise bandwidth", powers);
@@ -39,11 +39,6 @@ internal sealed class TracePowerReport(TraceLevels levels, SpectrumTrace trace, 
             WriteChannel(from, noise, filter, offset);
         }
     }
-
-    private bool IsTooCoarse => levels.Spacing > MostSpacing * trace.ResolutionBandwidth;
-
-    private string TooCoarse =>
-        Text($"points lie {Engineering.Format(levels.Spacing, "Hz", 3)} apart and the resolution bandwidth is {Engineering.Format(trace.ResolutionBandwidth ?? 0, "Hz", 3)}: power falls between them; take more points or a narrower span");
 
     private double? PowerOffset() => levels.Unit == "dBm" ? 0 : plan.Chain.Impedance is { } ohms ? Decibels.DbmOfDbv(0, ohms) : null;
 
@@ -83,9 +78,9 @@ internal sealed class TracePowerReport(TraceLevels levels, SpectrumTrace trace, 
 
     private void WriteChannel(int from, TraceNoise noise, double filter, double offset)
     {
-        if (IsTooCoarse)
+        if (levels.TooCoarse(filter) is { } coarse)
         {
-            sheet.Refuse("point-spacing", TooCoarse, Quantities.ChannelPower);
+            sheet.Refuse("point-spacing", coarse, Quantities.ChannelPower);
             return;
         }
         ReadOnlySpan<double> part = levels.Levels[from..];
@@ -103,63 +98,4 @@ internal sealed class TracePowerReport(TraceLevels levels, SpectrumTrace trace, 
     }
 
     private static BudgetTerm[] Bounded(string name, double half) => half > 0 ? [BudgetTerm.Rectangular(name, half)] : [];
-
-    private void WriteOccupied(int from, TraceNoise noise)
-    {
-        Quantity quantity = Quantities.OccupiedBandwidth;
-        if (IsTooCoarse)
-        {
-            sheet.Refuse("point-spacing", TooCoarse, quantity);
-            return;
-        }
-        double floor = Decibels.PowerRatio(noise.MeanDb), total = 0;
-        double[] powers = new double[levels.Count - from];
-        for (int i = 0; i < powers.Length; i++)
-            total += powers[i] = Decibels.PowerRatio(levels.Level(from + i)) - floor;
-        double independent = Math.Min(1, levels.Spacing / Math.Max(levels.Spacing, trace.ResolutionBandwidth ?? levels.Spacing));
-        double wander = floor * Math.Sqrt(powers.Length / noise.Averages / independent);
-        if (!(wander < MostNoise * OutsideShare * total) || OccupiedBand.Of(levels.Frequency(from), levels.Spacing, powers) is not { } band)
-        {
-            sheet.Refuse("noise", "what stands at the ends of the span, noise or the signal itself, holds as much power as the half percent on each side; set the span to about three times the signal, or average more", quantity);
-            return;
-        }
-        double width = band.Width * _chain.FrequencyFactor;
-        if (trace.ResolutionBandwidth is not { } filter)
-        {
-            sheet.RefuseBelow("no-resolution-bandwidth", $"< {Engineering.Format(width, "Hz", 3)}: signal and resolution filter together, for the file states no resolution bandwidth", width, quantity);
-            return;
-        }
-        // A Gaussian filter itself holds 99 % in 5.15 of its standard deviations; poles have wider skirts.
-        double own = 2 * 2.5758293035489004 / Math.Sqrt(8 * Math.Log(2)) * filter;
-        if (width < 1.5 * own)
-        {
-            sheet.RefuseBelow("unresolved", $"< {Engineering.Format(width, "Hz", 3)}: no wider than the resolution filter makes a line; narrow the resolution bandwidth", width, quantity);
-            return;
-        }
-        // What lies outside scatters too, where it is noise-like.
-        double outside = 0;
-        for (int i = 0; i < powers.Length; i++)
-            if (levels.Frequency(from + i) is var f && (f < band.Low || f > band.High))
-                outside += powers[i] * powers[i] / 2;
-        wander = Math.Sqrt(wander * wander + outside / noise.Averages / independent);
-        double narrow = Math.Sqrt(width * width - own * own), slope = Math.Min(Edge(powers, band.Low - levels.Frequency(from)), Edge(powers, band.High - levels.Frequency(from)));
-        sheet.Add(new Reading(quantity, (width + narrow) / 2, "Hz", _chain.ForTime(width,
-            [
-                BudgetTerm.Normal("noise", Math.Sqrt(2) * wander / slope * levels.Spacing),
-                BudgetTerm.Rectangular("point-spacing", levels.Spacing / 4),
-                BudgetTerm.Rectangular("resolution filter", (width - narrow) / 2),
-            ]), "cumulative-power")
-        { Note = $"99 %, from {Engineering.Format(band.Low, "Hz", 5)} to {Engineering.Format(band.High, "Hz", 5)}, noise taken off" });
-    }
-
-    // Power a point around an edge: what the noise's wander is held against.
-    private double Edge(double[] powers, double offset)
-    {
-        int centre = (int)Math.Round(offset / levels.Spacing), reach = Math.Max(2, powers.Length / 200);
-        double sum = 0;
-        int count = 0;
-        for (int i = Math.Max(0, centre - reach); i <= Math.Min(powers.Length - 1, centre + reach); i++)
-            (sum, count) = (sum + powers[i], count + 1);
-        return Math.Max(sum / count, double.Epsilon);
-    }
 }

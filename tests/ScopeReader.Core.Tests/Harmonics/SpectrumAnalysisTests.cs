@@ -6,14 +6,7 @@ namespace ScopeReader.Tests.Harmonics;
 
 public class SpectrumAnalysisTests
 {
-    private static readonly SpectrumLines Source = new()
-    {
-        Lines = [new(455.3e3, -10), new(2 * 455.3e3, -45), new(3 * 455.3e3, -60)],
-        Start = 100e3,
-        Stop = 2.1e6,
-        Count = 2001,
-        ResolutionBandwidth = 5e3,
-    };
+    private static readonly SpectrumLines Source = Traces.Lines;
 
     private static readonly Plan Known = new()
     {

@@ -6,16 +6,7 @@ namespace ScopeReader.Tests.Harmonics;
 
 public class TraceMeasurementTests
 {
-    private static readonly SpectrumLines Source = new()
-    {
-        Lines = [new(455.3e3, -10), new(2 * 455.3e3, -45), new(3 * 455.3e3, -60)],
-        Start = 100e3,
-        Stop = 2.1e6,
-        Count = 2001,
-        ResolutionBandwidth = 5e3,
-        NoiseDbm = -85,
-        Sweeps = 10,
-    };
+    private static readonly SpectrumLines Source = Traces.Lines with { NoiseDbm = -85, Sweeps = 10 };
 
     private static readonly MeasuringChain Exact = new() { TimebaseTolerancePpm = 0, GainTolerancePercent = 0, FlatnessDb = 0 };
 

@@ -7,16 +7,7 @@ namespace ScopeReader.Tests.Limits;
 
 public class LineJudgeTests
 {
-    private static readonly SpectrumLines Source = new()
-    {
-        Lines = [new(455.3e3, -10), new(2 * 455.3e3, -45), new(3 * 455.3e3, -60)],
-        Start = 100e3,
-        Stop = 2.1e6,
-        Count = 2001,
-        ResolutionBandwidth = 5e3,
-        NoiseDbm = -100,
-        Sweeps = 20,
-    };
+    private static readonly SpectrumLines Source = Traces.Lines with { NoiseDbm = -100, Sweeps = 20 };
 
     private static readonly MeasuringChain Chain = new() { GainTolerancePercent = 5, FlatnessDb = 0.5, Impedance = 50 };
 
