@@ -88,8 +88,8 @@ public static class Engineering
         return $"{text[..at]}e{int.Parse(text.AsSpan(at + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture)}";
     }
 
-    // A plain number has no prefix, and a row of zeros is not read: 23.2e-6.
-    private static bool IsSmallNumber(double value, string unit) => unit == "1" && Math.Abs(value) is >= 1e-30 and < 1e-3;
+    // A plain number has no prefix, and a row of zeros is not read: 23.2e-6. Below a millionth of a millionth the power stands as it is.
+    private static bool IsSmallNumber(double value, string unit) => unit == "1" && Math.Abs(value) is >= 1e-12 and < 1e-3;
 
     private static int SmallPower(double value) => Math.Max(-BasePrefix, (int)Math.Floor(Magnitude(value, 4) / 3.0));
 
