@@ -109,4 +109,20 @@ public sealed class FaultTests : IDisposable
         command.CommandText = sql;
         command.ExecuteNonQuery();
     }
+
+    [Fact]
+    public void A_name_that_the_database_keeps_for_its_memory_is_a_file_like_any_other()
+    {
+        string before = Directory.GetCurrentDirectory();
+        try
+        {
+            using (MeasurementArchive.Open(":memory:"))
+                Assert.True(File.Exists(Path.Combine(before, ":memory:")));
+        }
+        finally
+        {
+            foreach (string left in Directory.GetFiles(before, ":memory:*"))
+                File.Delete(left);
+        }
+    }
 }

@@ -27,7 +27,7 @@ internal static class ArchiveFile
     /// <summary>Opens to read and write, making the file where there is none.</summary>
     public static Database OpenToWrite(string path, TimeSpan patience)
     {
-        Database database = Connect(path, SqliteOpenMode.ReadWriteCreate, patience);
+        Database database = Connect(Path.GetFullPath(path), SqliteOpenMode.ReadWriteCreate, patience);
         try
         {
             Check(database, path, allowEmpty: true);
@@ -71,7 +71,7 @@ internal static class ArchiveFile
         Database? database = null;
         try
         {
-            database = Connect(path, SqliteOpenMode.ReadOnly, patience);
+            database = Connect(Path.GetFullPath(path), SqliteOpenMode.ReadOnly, patience);
             Check(database, path, allowEmpty: false);
             return database;
         }
@@ -93,6 +93,7 @@ internal static class ArchiveFile
 
     private static bool LogIsEmpty(string path) => !File.Exists(path + "-wal") || new FileInfo(path + "-wal").Length == 0;
 
+    // A whole path: names such as :memory: would otherwise make an archive that ends with the process.
     private static Database Connect(string source, SqliteOpenMode mode, TimeSpan patience)
     {
         var database = new Database(new SqliteConnectionStringBuilder

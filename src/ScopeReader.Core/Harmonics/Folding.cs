@@ -15,12 +15,17 @@ public static class Folding
     /// <param name="count">Number of samples.</param>
     /// <param name="order">The harmonic.</param>
     /// <param name="highest">Harmonics up to here are looked at.</param>
-    /// <returns>Its order; 0 for a constant, which a harmonic near a multiple of the sample rate shows as; null where there is none.</returns>
+    /// <returns>
+    /// Its order; 0 for a constant, which a harmonic near a multiple of the sample rate shows as; its own at half of the sample rate,
+    /// where only one of its two phases shows; null where there is none.
+    /// </returns>
     public static int? Collision(double frequency, int count, int order, int highest)
     {
         double place = Apparent(order * frequency, 1), near = 2.0 / count;
         if (place < near)
             return 0;
+        if (2 * (0.5 - place) < near)
+            return order;
         for (int other = 1; other <= highest; other++)
             if (other != order && Math.Abs(Apparent(other * frequency, 1) - place) < near)
                 return other;

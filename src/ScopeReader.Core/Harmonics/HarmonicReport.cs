@@ -79,7 +79,7 @@ internal sealed class HarmonicReport(HarmonicLines lines)
         if (order <= _counts.Fitted && lines.Harmonics[order - 1] is { IsResolved: true } folded)
             return Text($"harmonic {order} lies above half of the sample rate; where sampling folds it to, {lines.Place(Folding.Apparent(order * lines.Levels.Frequency, 1))}, stands a line of {lines.Dbc(folded.Amplitude):F1} dBc; {how}");
         if (Folding.Collision(lines.Levels.Frequency, lines.Levels.Count, order, _counts.Wanted) is { } other)
-            return Text($"harmonic {order} lies above half of the sample rate, and sampling folds it onto {(other == 0 ? "the mean" : other == 1 ? "the fundamental" : Text($"harmonic {other}"))}; {how}");
+            return Text($"harmonic {order} lies above half of the sample rate, and sampling folds it onto {(other == 0 ? "the mean" : other == order ? "half of the sample rate, where only one of its two phases shows" : other == 1 ? "the fundamental" : Text($"harmonic {other}"))}; {how}");
         return Text($"harmonic {order} lies above half of the sample rate; {how}");
     }
 

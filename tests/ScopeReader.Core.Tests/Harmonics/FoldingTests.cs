@@ -18,6 +18,8 @@ public class FoldingTests
         // At 5 samples a cycle harmonic 4 comes down on the fundamental, 6 too; 5 on the mean. 0.2 + 1e-6 of a cycle: 4 shows 5e-6 away.
         Assert.Equal(1, Folding.Collision(0.2, 1000, 4, 3));
         Assert.Equal(0, Folding.Collision(0.2, 1000, 5, 3));
+        // At 20 samples a cycle harmonic 10 lies on half of the sample rate, its own image.
+        Assert.Equal(10, Folding.Collision(0.05, 1000, 10, 9));
         Assert.Null(Folding.Collision(0.21, 1000, 4, 3));
         Assert.Null(Folding.Collision(0.2 + 1e-3, 1000, 4, 3));
     }

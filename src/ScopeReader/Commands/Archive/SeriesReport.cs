@@ -81,7 +81,9 @@ internal static class SeriesReport
         string Ranges(IReadOnlyList<(double From, double To)> ranges) => ranges.Count == 0 ? "nowhere between the settings measured"
             : string.Join(" and ", ranges.Select(r => $"from {Engineering.Format(r.From, setting)} to {Engineering.Format(r.To, setting)}"));
         sheet.Line($"{limit} {Ranges(fit.SettingsWithin(from, to))} by the curve");
-        sheet.Line($"{limit} {Ranges(fit.SettingsWithin(from, to, fit.ExpandedPrediction))} for one more reading at 95 %; the chain's own error is not in this");
+        // Two points have no scatter that a further reading could be foretold from.
+        if (!double.IsNaN(fit.SlopeExpandedUncertainty))
+            sheet.Line($"{limit} {Ranges(fit.SettingsWithin(from, to, fit.ExpandedPrediction))} for one more reading at 95 %; the chain's own error is not in this");
         if (low is { } a && high is { } b)
             sheet.Line($"closest to the middle of the limit at {Engineering.Format(fit.Closest((a + b) / 2), setting)}");
     }

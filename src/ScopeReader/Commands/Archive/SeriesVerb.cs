@@ -38,8 +38,9 @@ internal static class SeriesVerb
             string? only = parsed.GetValue(channel);
             return ArchiveCommand.Run(surroundings, () =>
             {
+                bool allRead = true;
                 Func<string, IReadOnlyList<SeriesPoint>> points = named.Length > 0
-                    ? FromFiles(named, settings, read, only, condition, surroundings, cancellation)
+                    ? FromFiles(named, settings, read, only, condition, surroundings, out allRead, cancellation)
                     : FromArchive(ArchiveCommand.PathOf(parsed, archive), query, only, condition);
                 IReadOnlyList<SeriesPoint> found = points(id);
                 if (found.Count < 2 || found.Select(p => p.Setting).Distinct().Count() < 2)
@@ -49,7 +50,7 @@ internal static class SeriesVerb
                 }
                 bool load = found[0].SettingUnit == "F" && points(Quantities.Frequency.Id).Count == found.Count;
                 surroundings.Output.Write(SeriesReport.Text(id, condition, found, low, high, load ? points(Quantities.Frequency.Id) : null, surroundings));
-                return ExitStatus.Passed;
+                return allRead ? ExitStatus.Passed : ExitStatus.Unreadable;
             }, cancellation);
         });
         return command;
@@ -94,13 +95,14 @@ internal static class SeriesVerb
         return quantity => SeriesPoint.From(entries, quantity, channel, condition);
     }
 
-    private static Func<string, IReadOnlyList<SeriesPoint>> FromFiles(string[] files, Condition[] settings, Plan plan, string? channel, string condition, Surroundings to, CancellationToken cancellation)
+    private static Func<string, IReadOnlyList<SeriesPoint>> FromFiles(string[] files, Condition[] settings, Plan plan, string? channel, string condition, Surroundings to, out bool allRead, CancellationToken cancellation)
     {
         using ProgressLine progress = to.Progress(cancellation);
         MeasuredFile[] measured = [.. files.Select(f => CaptureMeasurer.Measure(f, plan, channel, progress, cancellation))];
         progress.Hide();
         foreach (MeasuredFile file in measured.Where(m => m.Error is not null))
             to.Error.WriteLine(SafeText.Of(file.Error!));
+        allRead = measured.All(m => m.Error is null);
         return quantity =>
         {
             var points = new List<SeriesPoint>();

@@ -87,6 +87,18 @@ public sealed class ArchiveVerbTests : IDisposable
         Assert.Contains("within 500", series, StringComparison.Ordinal);
     }
 
+    [Fact]
+    public async Task A_series_of_two_foretells_no_further_reading_and_ends_as_its_worst_file_does()
+    {
+        string missing = Path.Combine(Path.GetTempPath(), "no-such-capture.csv");
+        var (status, output, error) = await Run.Program("series", Run.Demo("if-source-7.csv"), Run.Demo("if-source-8.csv"), missing, "--plan", Run.Demo("if-source.toml"),
+            "--against", "supply", "--at", "4.5V,5V,5.5V", "--within", "500ppm");
+        Assert.Equal(3, status);
+        Assert.StartsWith(missing, error, StringComparison.Ordinal);
+        Assert.Contains("by the curve", output, StringComparison.Ordinal);
+        Assert.DoesNotContain("one more reading", output.ReplaceLineEndings(" "), StringComparison.Ordinal);
+    }
+
     [Theory]
     [InlineData(20)]
     [InlineData(40)]
